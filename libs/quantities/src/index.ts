@@ -1,0 +1,1 @@
+export { OutOfRangeError } from './out-of-range-error.js';
