@@ -1,0 +1,31 @@
+import { Module, type DynamicModule } from '@nestjs/common';
+import { APP_FILTER, APP_INTERCEPTOR, APP_PIPE } from '@nestjs/core';
+import { AuthModule } from './auth/auth.module.js';
+import { ClockModule } from './clock/clock.module.js';
+import { ConfigModule } from './config/config.module.js';
+import type { Config } from './config/config.js';
+import { DatabaseModule } from './database/database.module.js';
+import { HistoryModule } from './history/history.module.js';
+import { ErrorFilter } from './http/error.filter.js';
+import { HealthController } from './http/health.controller.js';
+import { schemaPipe } from './http/schema.pipe.js';
+import { IdempotencyInterceptor } from './idempotency/idempotency.interceptor.js';
+import { OutboxModule } from './outbox/outbox.module.js';
+import { PapersModule } from './papers/papers.module.js';
+import { ShopModule } from './shop/shop.module.js';
+
+@Module({})
+export class AppModule {
+  static register(config: Config): DynamicModule {
+    return {
+      module: AppModule,
+      imports: [ConfigModule.register(config), ClockModule, DatabaseModule, HistoryModule, ShopModule, PapersModule, OutboxModule, AuthModule],
+      controllers: [HealthController],
+      providers: [
+        { provide: APP_PIPE, useFactory: schemaPipe },
+        { provide: APP_FILTER, useClass: ErrorFilter },
+        { provide: APP_INTERCEPTOR, useClass: IdempotencyInterceptor },
+      ],
+    };
+  }
+}

@@ -1,0 +1,54 @@
+/** What stands at the head of the shop's papers, and what its numbers go by. */
+export interface ShopProfile {
+  readonly name: string;
+  readonly addressLines: readonly string[];
+  readonly phone: string;
+  readonly email: string;
+  readonly taxNumber: string;
+  readonly bankLine: string;
+  readonly currency: string;
+  readonly defaultTaxRateBasisPoints: number;
+  /** in a one-person shop the tester may also release; off unless the manager switches it on */
+  readonly onePersonMayRelease: boolean;
+}
+
+export interface BaySupply {
+  readonly id: string;
+  readonly name: string;
+  readonly kind: 'variable' | 'taps';
+  readonly minVoltsV: number;
+  readonly maxVoltsV: number;
+  readonly maxAmpsA: number;
+  readonly frequencyHz: number;
+  readonly tapsV?: readonly number[];
+}
+export interface BayCable {
+  readonly id: string;
+  readonly name: string;
+  readonly crossSectionM2: number;
+  readonly lengthM: number;
+  readonly maxAmpsA: number;
+}
+export interface Oven {
+  readonly id: string;
+  readonly name: string;
+  readonly remark: string;
+}
+export interface BayEquipment {
+  readonly supplies: readonly BaySupply[];
+  readonly cables: readonly BayCable[];
+  readonly ovens: readonly Oven[];
+}
+
+export const EMPTY_PROFILE: ShopProfile = {
+  name: 'Your rewind shop',
+  addressLines: [],
+  phone: '',
+  email: '',
+  taxNumber: '',
+  bankLine: '',
+  currency: 'EUR',
+  defaultTaxRateBasisPoints: 1900,
+  onePersonMayRelease: false,
+};
+export const EMPTY_BAY: BayEquipment = { supplies: [], cables: [], ovens: [] };
