@@ -13,13 +13,14 @@ import { IdempotencyInterceptor } from './idempotency/idempotency.interceptor.js
 import { OutboxModule } from './outbox/outbox.module.js';
 import { PapersModule } from './papers/papers.module.js';
 import { ShopModule } from './shop/shop.module.js';
+import { UsersModule } from './users/users.module.js';
 
 @Module({})
 export class AppModule {
   static register(config: Config): DynamicModule {
     return {
       module: AppModule,
-      imports: [ConfigModule.register(config), ClockModule, DatabaseModule, HistoryModule, ShopModule, PapersModule, OutboxModule, AuthModule],
+      imports: [ConfigModule.register(config), ClockModule, DatabaseModule, HistoryModule, ShopModule, PapersModule, OutboxModule, AuthModule, UsersModule],
       controllers: [HealthController],
       providers: [
         { provide: APP_PIPE, useFactory: schemaPipe },

@@ -30,7 +30,6 @@ export const writeOptions = (database: string): DataSourceOptions => ({
 /** The reading connection: a write on it fails loudly. */
 export const readOptions = (database: string): DataSourceOptions => ({
   type: 'better-sqlite3',
-  name: 'read',
   database,
   entities: [],
   synchronize: false,
