@@ -93,9 +93,10 @@ function readUnit(text: string, kind: Kind, system: UnitSystem): Unit | Failure 
   if (found) return found;
   const hint = unitOf(kind, system);
   const ask = hint === '' ? `Write ${wordsOfKind(kind)} without a unit.` : `This field takes ${wordsOfKind(kind)} in ${hint}.`;
+  if (hint === '') return no('letters', `“${text}” does not belong here. ${ask}`);
   const other = dimensionOf(text);
-  if (other && other !== dimension) return no('wrong-dimension', `${text} measures ${other === 'number' ? 'nothing' : other}. ${ask}`);
-  if (hint === '' || /\d/.test(text)) return no('letters', `“${text}” is not a number. ${ask}`);
+  if (other && other !== dimension) return no('wrong-dimension', `${text} measures ${other}. ${ask}`);
+  if (/\d/.test(text)) return no('letters', `“${text}” is not a number. ${ask}`);
   return no('unknown-unit', `“${text}” is no unit known here. ${ask}`);
 }
 
