@@ -110,14 +110,11 @@ export const recordInputSchema = z.discriminatedUnion('kind', [
 export type RecordInput = z.infer<typeof recordInputSchema>;
 export type ReadingsOf<K extends RecordKind> = Extract<RecordInput, { kind: K }>['readings'];
 
-export const makeRecordSchema = z.strictObject({ jobVersion: versionField, record: recordInputSchema });
+export const makeRecordSchema = z.strictObject({ record: recordInputSchema });
 export type MakeRecord = z.infer<typeof makeRecordSchema>;
 /** A correction: the next revision, with its reason; the old one stays. */
 export const amendRecordSchema = z.strictObject({ version: versionField, reason: requiredLine(400, 'Why is it corrected?'), record: recordInputSchema });
 export type AmendRecord = z.infer<typeof amendRecordSchema>;
-export const signRecordSchema = z.strictObject({ version: versionField, password: z.string().min(1, 'Type your password to sign.').max(256) });
-export type SignRecord = z.infer<typeof signRecordSchema>;
-
 export const recordViewSchema = z.strictObject({
   id: idField,
   jobId: idField,

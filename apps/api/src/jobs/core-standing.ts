@@ -24,8 +24,20 @@ function standingOf(facts: JobFacts, record: RecordFact | undefined): CoreStandi
 
 export const coreBefore = (facts: JobFacts): CoreStanding => standingOf(facts, lastOf(facts, 'core-test-before'));
 
-/** The last test after counts; a core repair made after it asks for a new one. */
-export const coreAfter = (facts: JobFacts): CoreStanding => standingOf(facts, lastOf(facts, 'core-test-after'));
+/** The last test after counts, as long as neither a repair nor a correction of the before test came later. */
+export function coreAfter(facts: JobFacts): CoreStanding {
+  const record = lastOf(facts, 'core-test-after');
+  const repair = lastOf(facts, 'core-repair');
+  if (record && repair && repair.id > record.id) return { kind: 'missing' };
+  if (record && heldAgainstOlder(facts, record)) return { kind: 'not-valid', record };
+  return standingOf(facts, record);
+}
+
+function heldAgainstOlder(facts: JobFacts, after: RecordFact): boolean {
+  const against = after.result['against'] as { recordId: string; revision: number } | undefined;
+  const before = validBefore(facts);
+  return against !== undefined && (before?.id !== against.recordId || before.revision !== against.revision);
+}
 
 export const waiverInForce = (facts: JobFacts): boolean =>
   facts.signOffs.some((s) => s.kind === 'waiver' && facts.signOffs.some((c) => c.kind === 'waiver-countersignature' && c.refersTo === s.id));
@@ -38,4 +50,8 @@ export const decisionOn = (facts: JobFacts, about: 'core-test-before' | 'core-te
 /** A decision must be younger than the record it decides on. */
 export const decisionAnswers = (decision: SignOffFact | undefined, record: RecordFact): boolean => decision !== undefined && decision.recordId === record.id;
 
-export const hasCoreBefore = (facts: JobFacts): boolean => recordsOf(facts, 'core-test-before').some((r) => r.verdict !== 'not-valid');
+/** The before test that counts: the last one that is valid. */
+export const validBefore = (facts: JobFacts): RecordFact | undefined =>
+  recordsOf(facts, 'core-test-before')
+    .filter((r) => r.verdict !== 'not-valid')
+    .at(-1);
