@@ -5,7 +5,13 @@ export interface ShopProfile {
   readonly phone: string;
   readonly email: string;
   readonly taxNumber: string;
-  readonly bankLine: string;
+  readonly website: string;
+  /** a line the law or the shop wants on every paper */
+  readonly registration: string;
+  readonly bank: { readonly accountHolder: string; readonly iban: string; readonly bic: string; readonly bankName: string } | null;
+  readonly paperSize: 'A4' | 'Letter';
+  /** the shop's conditions on the intake receipt, in its own words */
+  readonly conditions: string;
   readonly currency: string;
   readonly defaultTaxRateBasisPoints: number;
   /** in a one-person shop the tester may also release; off unless the manager switches it on */
@@ -46,7 +52,11 @@ export const EMPTY_PROFILE: ShopProfile = {
   phone: '',
   email: '',
   taxNumber: '',
-  bankLine: '',
+  website: '',
+  registration: '',
+  bank: null,
+  paperSize: 'A4',
+  conditions: '',
   currency: 'EUR',
   defaultTaxRateBasisPoints: 1900,
   onePersonMayRelease: false,
