@@ -1,5 +1,6 @@
-import type { FastifyInstance, FastifyRequest } from 'fastify';
+import type { FastifyInstance } from 'fastify';
 import { z } from 'zod';
+import { isFromHere } from '../../from-here.js';
 import { PAGE_HEADERS } from '../../look/page.js';
 import { ApiError } from '../http/api-error.js';
 import { isDisputeReason, type DisputeReason } from '../objects/new-dispute.js';
@@ -61,7 +62,7 @@ function act<S extends z.ZodType>(schema: S, work: (asked: z.output<S>) => unkno
 export function controlRoutes(app: FastifyInstance, world: World, control: Control): void {
   app.addHook('onRequest', async (request, reply) => {
     void reply.headers(PAGE_HEADERS);
-    if (request.method !== 'GET' && !fromHere(request)) await reply.status(403).send({ error: { message: 'The control API answers its own page and programs on this machine only.' } });
+    if (request.method !== 'GET' && !isFromHere(request)) await reply.status(403).send({ error: { message: 'The control API answers its own page and programs on this machine only.' } });
   });
   app.addContentTypeParser('application/json', { parseAs: 'string' }, (_request, body, done) => {
     try {
@@ -94,11 +95,5 @@ async function attempt(work: () => Promise<unknown>): Promise<{ status: number; 
     if (error instanceof z.ZodError) return { status: 400, body: { error: { message: z.prettifyError(error) } } };
     throw error;
   }
-}
-
-/** A browser names the page that sends; another site's page must not steer the fake. Programs name none. */
-function fromHere(request: FastifyRequest): boolean {
-  const { origin, host } = request.headers;
-  return origin === undefined || (URL.canParse(origin) && new URL(origin).host === host);
 }
 
