@@ -7,7 +7,7 @@ export type Modules = readonly (readonly boolean[])[];
 
 /** QR code (ISO/IEC 18004), byte mode where it must, error level M: a quarter of a soiled label may be lost before it fails. */
 export function qrModules(text: string): Modules {
-  const [symbol] = bwipjs.raw({ bcid: 'qrcode', text: asUtf8(text), eclevel: 'M' });
+  const [symbol] = bwipjs.raw('qrcode', asUtf8(text), 'eclevel=M');
   if (!symbol || !('pixs' in symbol)) throw new Error('No QR code came of this text.');
   const { pixs, pixx, pixy } = symbol;
   return Array.from({ length: pixy }, (_, row) => Array.from({ length: pixx }, (_cell, column) => pixs[row * pixx + column] === 1));
@@ -15,7 +15,7 @@ export function qrModules(text: string): Modules {
 
 /** Code 128 (ISO/IEC 15417): the widths of bars and spaces by turns, beginning with a bar. */
 export function code128Widths(text: string): readonly number[] {
-  const [symbol] = bwipjs.raw({ bcid: 'code128', text });
+  const [symbol] = bwipjs.raw('code128', text, '');
   if (!symbol || !('sbs' in symbol)) throw new Error('No bar code came of this text.');
   return symbol.sbs;
 }

@@ -30,7 +30,6 @@ export const REPLACEMENT_CHARACTER = 0xfffd;
 // Arabic, Hebrew, Indic and their presentation forms need the font's own shaping.
 const SHAPED = /[\u0590-\u109f\u1780-\u18af\ufb1d-\ufdff\ufe70-\ufefc]/;
 // Control characters, zero-width marks and direction overrides: they print nothing, or lie about order.
-// eslint-disable-next-line no-control-regex
 const SILENT = /[\u0000-\u0009\u000b-\u001f\u007f-\u009f\u00ad\u061c\u200b-\u200f\u202a-\u202e\u2060-\u206f\ufe00-\ufe0f\ufeff]/g;
 
 const parsed = new WeakMap<Uint8Array, Face>();
