@@ -1,0 +1,1 @@
+export const greeting = (contactName: string): string => (contactName ? `Good day ${contactName},` : 'Good day,');
