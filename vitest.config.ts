@@ -17,7 +17,7 @@ export default defineConfig({
         resolve: { alias },
         test: {
           name: 'api',
-          include: ['apps/api/**/*.spec.ts', 'mocks/**/*.spec.ts'],
+          include: ['apps/api/**/*.spec.ts', 'apps/run/**/*.spec.ts', 'mocks/**/*.spec.ts'],
           environment: 'node',
           setupFiles: [here('./apps/api/test/setup.ts')],
           testTimeout: 60_000,
