@@ -12,6 +12,7 @@ import { schemaPipe } from './http/schema.pipe.js';
 import { IdempotencyInterceptor } from './idempotency/idempotency.interceptor.js';
 import { OutboxModule } from './outbox/outbox.module.js';
 import { PapersModule } from './papers/papers.module.js';
+import { QuotesModule } from './quotes/quotes.module.js';
 import { ShopModule } from './shop/shop.module.js';
 import { UsersModule } from './users/users.module.js';
 
@@ -20,7 +21,7 @@ export class AppModule {
   static register(config: Config): DynamicModule {
     return {
       module: AppModule,
-      imports: [ConfigModule.register(config), ClockModule, DatabaseModule, HistoryModule, ShopModule, PapersModule, OutboxModule, AuthModule, UsersModule],
+      imports: [ConfigModule.register(config), ClockModule, DatabaseModule, HistoryModule, ShopModule, PapersModule, OutboxModule, AuthModule, UsersModule, QuotesModule],
       controllers: [HealthController],
       providers: [
         { provide: APP_PIPE, useFactory: schemaPipe },
