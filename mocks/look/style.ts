@@ -30,11 +30,14 @@ a{color:var(--copper)}
 .note :last-child{margin-bottom:0}
 dl.lines{margin:0}
 dl.lines div{display:flex;justify-content:space-between;gap:16px;padding:6px 0;border-bottom:1px solid var(--hair)}
+dl.lines div:last-child{border-bottom:0}
 dl.lines dd{margin:0;font-variant-numeric:tabular-nums;white-space:nowrap}
 label{display:block;font-weight:600;margin:14px 0 4px}
-input,select{width:100%;min-height:48px;padding:8px 12px;border:1px solid var(--line);border-radius:3px;background:var(--card);color:var(--text);font:inherit;font-variant-numeric:tabular-nums}
+input,select{width:100%;min-height:48px;padding:8px 12px;border:1px solid var(--line);border-radius:3px;background:var(--card);color:var(--text);font:inherit;font-weight:400;font-variant-numeric:tabular-nums}
 input[aria-invalid=true]{border:2px solid var(--bad)}
 .wrong{color:var(--bad);font-size:14px;margin:4px 0 0}
+.hint{margin:4px 0 0;font-size:14px;color:var(--muted)}
+.back{text-align:center;margin:14px 0 0}
 .pair{display:grid;grid-template-columns:1fr 1fr;gap:16px}
 button{font:inherit;font-weight:600;min-height:48px;padding:10px 18px;border-radius:3px;border:1px solid var(--copper);background:var(--copper);color:var(--on-copper);cursor:pointer}
 button.plain{background:var(--card);color:var(--copper)}
@@ -43,7 +46,7 @@ button.full{width:100%;margin-top:22px}
 details{margin:20px 0}
 summary{font-weight:600;min-height:44px;padding:10px 0;cursor:pointer}
 ul.cards{list-style:none;margin:0;padding:0;display:grid;gap:8px}
-ul.cards button{width:100%;display:flex;flex-wrap:wrap;justify-content:space-between;gap:2px 12px;text-align:left;font-weight:400;padding:8px 12px;border-color:var(--line);background:var(--card);color:var(--text)}
+ul.cards button{width:100%;display:flex;flex-wrap:wrap;justify-content:space-between;align-content:center;align-items:center;gap:2px 12px;text-align:left;font-weight:400;padding:8px 12px;border-color:var(--line);background:var(--card);color:var(--text)}
 ul.cards b{font-weight:600;font-variant-numeric:tabular-nums}
 ul.cards span{color:var(--muted)}
 fieldset{border:0;margin:0;padding:0}
@@ -55,11 +58,11 @@ td.n{font-variant-numeric:tabular-nums;white-space:nowrap}
 td form{display:inline}
 td button{min-height:32px;padding:2px 10px;font-size:14px}
 .row{display:flex;flex-wrap:wrap;gap:12px;align-items:end}
-.row>*{flex:1 1 150px}
+.row>*{flex:1 1 170px}
 .row>button{flex:0 0 auto}
-.row label{margin-top:0}
+.row label{margin:0}
 .tools{display:flex;flex-wrap:wrap;gap:8px;margin:12px 0}
-iframe{width:100%;height:560px;border:1px solid var(--hair);background:#fff}
+iframe{width:100%;height:420px;resize:vertical;border:1px solid var(--hair);background:#fff}
 pre{white-space:pre-wrap;background:var(--card);border:1px solid var(--hair);border-radius:3px;padding:14px;margin:0;font:14px/1.5 "Noto Sans Mono",ui-monospace,monospace}
 ul.mails{list-style:none;margin:16px 0;padding:0;background:var(--card);border:1px solid var(--hair);border-radius:3px}
 ul.mails li{border-bottom:1px solid var(--hair)}

@@ -30,13 +30,13 @@ function emptyFace(filterTo: string): Markup {
 
 function row(mail: Mail): Markup {
   const files = summaryOf(mail).attachments;
-  return html`<li><a href="/messages/${mail.id}"><b>${mail.subject || TEXT.noSubject}</b><time datetime="${mail.receivedAt}">${when(mail.receivedAt)}</time><span class="quiet">${addressees(mail)}</span><span class="quiet small">${files > 0 && TEXT.count_files(files)}</span></a></li>`;
+  return html`<li><a href="/messages/${mail.id}"><b>${mail.subject || TEXT.noSubject}</b><time datetime="${mail.receivedAt}">${when(mail.receivedAt)}</time><span class="quiet">${addressees(mail)}</span><span class="quiet small">${files > 0 && TEXT.fileCount(files)}</span></a></li>`;
 }
 
 function doorPart(mode: DoorMode): Markup {
   return html`<h2>${TEXT.door}</h2><p class="quiet">${TEXT.doorHint}</p>
 <div class="note${mode === 'accepting' ? ' good' : ' bad'}"><p>${TEXT.modeIs(TEXT.modes[mode])}</p></div>
-<form class="row" method="post" action="/mode"><label>${TEXT.door}<select name="mode">${DOOR_MODES.map((choice) => html`<option value="${choice}" ${choice === mode && html`selected`}>${TEXT.modes[choice]}</option>`)}</select></label><button class="plain">${TEXT.setMode}</button></form>`;
+<form class="row" method="post" action="/mode"><label>${TEXT.doorMode}<select name="mode">${DOOR_MODES.map((choice) => html`<option value="${choice}" ${choice === mode && html`selected`}>${TEXT.modes[choice]}</option>`)}</select></label><button class="plain">${TEXT.setMode}</button></form>`;
 }
 
 export function mailPage(mail: Mail): string {

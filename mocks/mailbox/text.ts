@@ -17,7 +17,7 @@ export const TEXT = {
   replyTo: 'Answers go to',
   received: 'Received (UTC)',
   files: 'Files',
-  count_files: (count: number) => (count === 1 ? '1 file' : `${count} files`),
+  fileCount: (count: number) => (count === 1 ? '1 file' : `${count} files`),
   asPage: 'As the reader sees it',
   asText: 'As plain text',
   noText: 'This mail has no plain text part.',
@@ -30,6 +30,7 @@ export const TEXT = {
   unknown: 'No such mail',
   unknownHint: 'It was deleted, or it belongs to another start of the demo.',
   door: 'The mail server',
+  doorMode: 'What it does',
   doorHint: 'Let sending go wrong, to see what the application does.',
   modes: {
     accepting: 'Accepts mail',

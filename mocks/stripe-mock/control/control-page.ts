@@ -35,7 +35,7 @@ ${control.rules().map((rule) => html`<div class="note"><p>${TEXT.rule(TEXT.actio
 function callsPart(control: Control): Markup {
   return html`<h2>${TEXT.calls}</h2><p class="quiet">${TEXT.callsHint}</p>
 ${control.faults().map((fault) => html`<div class="note"><p>${TEXT.fault(TEXT.kinds[fault.kind], TEXT.whens[fault.when], fault.path, fault.left)}</p></div>`)}
-<form class="row" method="post" action="/_control/faults">${input('path', TEXT.path, '/v1')}${choice('kind', TEXT.kind, TEXT.kinds)}${choice('when', TEXT.when, TEXT.whens)}${input('status', TEXT.status, '500')}${input('left', TEXT.left, '1')}<button>${TEXT.addFault}</button></form>
+<form class="row" method="post" action="/_control/faults">${input('path', TEXT.path, '/v1')}${choice('kind', TEXT.kind, TEXT.kinds)}${choice('when', TEXT.when, TEXT.whens)}${input('status', TEXT.status, '500')}${input('left', TEXT.howManyCalls, '1')}<button>${TEXT.addFault}</button></form>
 <div class="tools">${button('faults/clear', TEXT.clearFaults)}${button('faults/let-go', TEXT.letGo)}</div>`;
 }
 

@@ -58,9 +58,9 @@ function chargeOf(world: World, request: RefundRequest): Charge {
   if (request.charge && !charge) throw missingRef('charge', request.charge, 'charge');
   if (intent && charge && charge.payment_intent !== intent.id) throw invalid(`Charge ${charge.id} does not belong to PaymentIntent ${intent.id}.`);
   if (!charge || charge.status !== 'succeeded') {
-    throw invalid(intent ? `This PaymentIntent (${intent.id}) does not have a successful charge to refund.` : `Charge ${charge?.id} did not succeed; there is nothing to refund.`);
+    throw invalid(intent ? `This PaymentIntent (${intent.id}) does not have a successful charge to refund.` : `Charge ${charge?.id} did not succeed; there is nothing to refund.`, { code: 'charge_not_refundable' });
   }
-  if (!charge.captured) throw invalid(`Charge ${charge.id} has not been captured. Cancel its PaymentIntent instead.`);
+  if (!charge.captured) throw invalid(`Charge ${charge.id} has not been captured. Cancel its PaymentIntent instead.`, { code: 'charge_not_refundable' });
   return charge;
 }
 

@@ -78,7 +78,7 @@ function intentFor(world: World, session: Session): PaymentIntent {
     amount: session.amount_total ?? 0,
     currency: session.currency ?? 'usd',
     customer: session.customer,
-    paymentMethodTypes: session.payment_method_types,
+    allowedPaymentMethodTypes: session.payment_method_types.map((type) => (type === 'us_bank_account' ? type : 'card')),
   });
 }
 

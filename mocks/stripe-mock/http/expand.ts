@@ -36,6 +36,8 @@ function walk(here: Json, steps: readonly string[], path: string, find: Lookup, 
     const extra = hidden(here, name);
     if (extra === undefined) throw notExpandable(path);
     here[name] = asJson(extra);
+  } else if (typeof there !== 'object') {
+    throw notExpandable(path);
   }
   walk(here[name], rest, path, find, hidden);
 }

@@ -16,7 +16,7 @@ export type Created = number | { gt?: number | undefined; gte?: number | undefin
 /** One page of a list that stands newest first. `ending_before` gives the page just above that item, in the same order. */
 export function listPage<T extends { id: string }>(items: readonly T[], request: PageRequest, url: string, kind: string): ListPage<T> {
   const limit = request.limit ?? 10;
-  if (request.starting_after && request.ending_before) throw invalid('You may only specify one of these parameters: starting_after, ending_before.');
+  if (request.starting_after && request.ending_before) throw invalid('You may only specify one of these parameters: starting_after, ending_before.', { code: 'parameters_exclusive' });
   const placeOf = (id: string, param: string) => {
     const place = items.findIndex((item) => item.id === id);
     if (place < 0) throw missingRef(kind, id, param);

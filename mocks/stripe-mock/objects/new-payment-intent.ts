@@ -8,7 +8,7 @@ export interface IntentOrder {
   description?: string | null;
   metadata?: Record<string, string>;
   receiptEmail?: string | null;
-  paymentMethodTypes?: string[];
+  allowedPaymentMethodTypes?: PaymentIntent['allowed_payment_method_types'];
   captureMethod?: PaymentIntent['capture_method'];
   confirmationMethod?: PaymentIntent['confirmation_method'];
   statementDescriptor?: string | null;
@@ -22,7 +22,7 @@ export function newPaymentIntent(order: IntentOrder, created: number): PaymentIn
   return {
     id,
     object: 'payment_intent',
-    allowed_payment_method_types: null,
+    allowed_payment_method_types: order.allowedPaymentMethodTypes ?? null,
     amount: order.amount,
     amount_capturable: 0,
     amount_details: { tip: {} },
@@ -51,7 +51,7 @@ export function newPaymentIntent(order: IntentOrder, created: number): PaymentIn
     payment_method: null,
     payment_method_configuration_details: null,
     payment_method_options: { card: { installments: null, mandate_options: null, network: null, request_three_d_secure: 'automatic' } },
-    payment_method_types: order.paymentMethodTypes ?? ['card'],
+    payment_method_types: order.allowedPaymentMethodTypes ?? ['card'],
     payment_record: null,
     processing: null,
     receipt_email: order.receiptEmail ?? null,

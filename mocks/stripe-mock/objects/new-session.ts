@@ -17,7 +17,7 @@ export interface SessionOrder {
   customerCreation: 'always' | 'if_required' | null;
   clientReferenceId: string | null;
   metadata: Record<string, string>;
-  paymentMethodTypes: string[];
+  allowedPaymentMethodTypes: string[] | null;
   billingAddressCollection: 'auto' | 'required' | null;
   submitType: Session['submit_type'];
   locale: Session['locale'];
@@ -73,7 +73,7 @@ export function newSession(order: SessionOrder, created: number): Session {
     adaptive_pricing: { enabled: false },
     after_expiration: null,
     allow_promotion_codes: null,
-    allowed_payment_method_types: null,
+    allowed_payment_method_types: order.allowedPaymentMethodTypes,
     amount_subtotal: total,
     amount_total: total,
     automatic_tax: { enabled: false, liability: null, provider: null, status: null },
@@ -115,7 +115,7 @@ export function newSession(order: SessionOrder, created: number): Session {
     payment_method_collection: 'if_required',
     payment_method_configuration_details: null,
     payment_method_options: {},
-    payment_method_types: order.paymentMethodTypes,
+    payment_method_types: order.allowedPaymentMethodTypes ?? ['card'],
     payment_status: total === 0 ? 'no_payment_required' : 'unpaid',
     permissions: null,
     phone_number_collection: { enabled: false },

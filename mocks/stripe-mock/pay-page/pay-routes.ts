@@ -1,6 +1,6 @@
 import type { FastifyInstance, FastifyReply } from 'fastify';
 import { PAGE_HEADERS } from '../../look/page.js';
-import { faultOf } from '../cards/card-details.js';
+import { faultOf, type CardFault } from '../cards/card-details.js';
 import { TEST_ACCOUNTS, TEST_ROUTING_NUMBER, testAccount } from '../cards/test-accounts.js';
 import { testCard } from '../cards/test-cards.js';
 import { methodFromAccount, methodFromCard } from '../engine/payment-methods.js';
@@ -110,14 +110,20 @@ export function payRoutes(app: FastifyInstance, world: World, changed: () => voi
     return methodFromCard(world, { number: typed.number, expMonth: expiry.month, expYear: expiry.year, cvc: typed.cvc }, billing);
   }
 
+  /** The number and the rest are looked at apart, so that both can be marked at once. */
   function wrongCard(typed: Typed): Wrong {
     const expiry = expiryIn(typed.expiry);
-    if (!expiry || typed.number === '' || typed.cvc === '') return {};
     const now = new Date(world.clock.nowMs());
-    const fault = faultOf({ number: typed.number, expMonth: expiry.month, expYear: expiry.year, cvc: typed.cvc }, { year: now.getUTCFullYear(), month: now.getUTCMonth() + 1 });
-    if (!fault) return {};
-    const words = declineWords(fault.code, fault.declineCode);
-    return fault.field === 'number' ? { number: words } : fault.field === 'cvc' ? { cvc: words } : { expiry: words };
+    const today = { year: now.getUTCFullYear(), month: now.getUTCMonth() + 1 };
+    const wrong: Wrong = {};
+    const mark = (field: keyof Wrong, fault: CardFault | undefined) => {
+      if (fault) wrong[field] = declineWords(fault.code, fault.declineCode);
+    };
+    const [anyNumber, anyDate] = [testCard(typed.number)?.number ?? '4242424242424242', { expMonth: 12, expYear: today.year + 1 }];
+    if (typed.number !== '') mark('number', faultOf({ number: typed.number, ...anyDate }, today));
+    if (expiry) mark('expiry', faultOf({ number: anyNumber, expMonth: expiry.month, expYear: expiry.year }, today));
+    if (typed.cvc !== '') mark('cvc', faultOf({ number: anyNumber, ...anyDate, cvc: typed.cvc }, today));
+    return wrong;
   }
 
   function filledWith(number: string, typed: Typed): Partial<PayFace> {

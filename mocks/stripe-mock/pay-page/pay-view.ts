@@ -32,8 +32,7 @@ export function payPage(face: PayFace): string {
 ${orderCard(face, sum)}
 ${face.failure && html`<div class="note bad" role="alert"><p><b>${TEXT.lastTry}</b></p><p>${face.failure}</p></div>`}
 ${face.filled && html`<div class="note good" role="status"><p>${TEXT.filled(face.filled)}</p></div>`}
-${session.amount_total === 0 ? freeForm(face) : [takesCards && cardForm(face, sum), takesDebits && bankForm(face, sum)]}
-${session.cancel_url && html`<p><a href="${session.cancel_url}">${TEXT.back}</a></p>`}`,
+${session.amount_total === 0 ? freeForm(face) : [takesCards && cardForm(face, sum), takesDebits && bankForm(face, sum)]}`,
   );
 }
 
@@ -53,8 +52,8 @@ function field(face: PayFace, name: keyof Typed, label: string, attributes: Mark
   const about = [wrong && `${id}-wrong`, hint && `${id}-hint`].filter(Boolean).join(' ');
   return html`<div><label for="${id}">${label}</label>
 <input id="${id}" name="${name}" value="${face.typed[name]}" ${attributes} ${wrong && html`aria-invalid="true"`} ${about && html`aria-describedby="${about}"`}>
-${hint && html`<p class="quiet small" id="${id}-hint">${hint}</p>`}
-${wrong && html`<p class="wrong" id="${id}-wrong">${wrong}</p>`}</div>`;
+${wrong && html`<p class="wrong" id="${id}-wrong">${wrong}</p>`}
+${hint && html`<p class="hint" id="${id}-hint">${hint}</p>`}</div>`;
 }
 
 function emailField(face: PayFace, id: string): Markup {
@@ -76,6 +75,7 @@ ${field(face, 'cvc', TEXT.cvc, html`inputmode="numeric" autocomplete="off" requi
 </div>
 ${field(face, 'name', TEXT.holder, html`autocomplete="off" required maxlength="200"`)}
 <button class="full">${TEXT.pay(sum)}</button>
+${backLink(face)}
 <h2>${TEXT.testCards}</h2>
 <p class="quiet small">${TEXT.testCardsHint}</p>
 <ul class="cards">${TEST_CARDS.filter((card) => card.listed).map(cardButton)}</ul>
@@ -97,12 +97,16 @@ ${emailField(face, 'bank-email')}
 ${field(face, 'account', TEXT.account, html`inputmode="numeric" autocomplete="off" required maxlength="17"`)}
 ${field(face, 'name', TEXT.holderOfAccount, html`autocomplete="off" required maxlength="200"`, undefined, 'bank-name')}
 <button class="full">${TEXT.payByBank(sum)}</button>
+${backLink(face)}
+<p class="hint">${TEXT.testAccountsHint}</p>
 <ul class="cards">${TEST_ACCOUNTS.map((account) => html`<li><button name="fill" value="${account.number}" formnovalidate><b>${account.number}</b><span>${account.listed}</span></button></li>`)}</ul>
 </form></details>`;
 }
 
 const freeForm = (face: PayFace): Markup => html`<div class="note"><p>${TEXT.freeNote}</p></div>
-<form method="post"><input type="hidden" name="method" value="free">${emailField(face, 'email')}<button class="full">${TEXT.free}</button></form>`;
+<form method="post"><input type="hidden" name="method" value="free">${emailField(face, 'email')}<button class="full">${TEXT.free}</button>${backLink(face)}</form>`;
+
+const backLink = (face: PayFace): Markup | null => (face.session.cancel_url ? html`<p class="back"><a href="${face.session.cancel_url}">${TEXT.back}</a></p>` : null);
 
 export function frame(title: string, body: Markup, name: string = TEXT.name): string {
   return page({ title, name, strip: TEXT.strip, body });

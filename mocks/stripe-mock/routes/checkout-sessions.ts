@@ -1,8 +1,10 @@
+import type Stripe from 'stripe';
 import { z } from 'zod';
 import { expireSession, createSession, type NewSession } from '../engine/sessions.js';
 import { invalid, missing } from '../http/api-error.js';
 import type { Operation } from '../http/api.js';
 import { createdFits, listPage } from '../http/list-page.js';
+import type { KnownParams } from '../http/known-params.js';
 import { mergedMetadata } from '../http/metadata.js';
 import { clearableText, created, currency, email, metadata, notNegative, onList, positive, text, webAddress, whole } from '../http/params.js';
 import type { Session } from '../objects/stored.js';
@@ -27,7 +29,7 @@ const intentData = z
     setup_future_usage: z.enum(['off_session', 'on_session']),
     statement_descriptor: text(22),
     statement_descriptor_suffix: text(22),
-  })
+  } satisfies KnownParams<Stripe.Checkout.SessionCreateParams.PaymentIntentData>)
   .partial();
 const body = z.strictObject({
   mode: z.enum(['payment']),
@@ -42,11 +44,11 @@ const body = z.strictObject({
   expires_at: whole().optional(),
   metadata: metadata().optional(),
   payment_intent_data: intentData.optional(),
-  payment_method_types: z.array(z.enum(['card', 'us_bank_account'])).min(1).optional(),
+  allowed_payment_method_types: z.array(z.enum(['card', 'us_bank_account'])).min(1).optional(),
   billing_address_collection: z.enum(['auto', 'required']).optional(),
   submit_type: z.enum(['auto', 'book', 'donate', 'pay']).optional(),
   locale: z.enum(['auto', 'de', 'en', 'en-GB', 'es', 'fr', 'it', 'nl']).optional(),
-});
+} satisfies KnownParams<Stripe.Checkout.SessionCreateParams>);
 const filters = z.strictObject({
   ...onList,
   created: created(),
@@ -54,7 +56,7 @@ const filters = z.strictObject({
   customer_details: z.strictObject({ email: text() }).optional(),
   payment_intent: text().optional(),
   status: z.enum(['complete', 'expired', 'open']).optional(),
-});
+} satisfies KnownParams<Stripe.Checkout.SessionListParams>);
 
 export function sessionRoutes(on: Operation, world: World): void {
   const { sessions, lineItems } = world.state;
@@ -99,7 +101,7 @@ export function sessionRoutes(on: Operation, world: World): void {
 }
 
 function orderOf(world: World, params: z.output<typeof body>): NewSession {
-  if (params.customer && params.customer_email) throw invalid('You may only specify one of these parameters: customer, customer_email.');
+  if (params.customer && params.customer_email) throw invalid('You may only specify one of these parameters: customer, customer_email.', { code: 'parameters_exclusive' });
   if (params.customer && params.customer_creation) throw invalid('`customer_creation` can only be used when `customer` is not set.', { param: 'customer_creation' });
   const intent = params.payment_intent_data ?? {};
   return {
@@ -117,7 +119,7 @@ function orderOf(world: World, params: z.output<typeof body>): NewSession {
     customerCreation: params.customer_creation ?? null,
     clientReferenceId: params.client_reference_id ?? null,
     metadata: mergedMetadata(null, params.metadata),
-    paymentMethodTypes: params.payment_method_types ?? ['card'],
+    allowedPaymentMethodTypes: params.allowed_payment_method_types ?? null,
     billingAddressCollection: params.billing_address_collection ?? null,
     submitType: params.submit_type ?? null,
     locale: params.locale ?? null,

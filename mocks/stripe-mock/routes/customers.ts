@@ -1,7 +1,9 @@
+import type Stripe from 'stripe';
 import { z } from 'zod';
-import { invalid, missing } from '../http/api-error.js';
+import { missing, missingRef } from '../http/api-error.js';
 import type { Operation } from '../http/api.js';
 import { createdFits, listPage } from '../http/list-page.js';
+import type { KnownParams } from '../http/known-params.js';
 import { mergedMetadata } from '../http/metadata.js';
 import { clearableText, created, email, metadata, onList, text } from '../http/params.js';
 import { newCustomer } from '../objects/new-customer.js';
@@ -9,7 +11,7 @@ import type { Customer } from '../objects/stored.js';
 import { emit, type World } from '../world.js';
 
 const address = z.strictObject({ city: text(), country: text(2), line1: text(), line2: clearableText(), postal_code: text(), state: text() }).partial();
-const facts = { email: email().or(z.literal('')), name: clearableText(256), phone: clearableText(20), description: clearableText(350), address, metadata: metadata() };
+const facts = { email: email().or(z.literal('')), name: clearableText(256), phone: clearableText(20), description: clearableText(350), address, metadata: metadata() } satisfies KnownParams<Stripe.CustomerCreateParams>;
 const body = z.strictObject(facts).partial();
 
 export function customerRoutes(on: Operation, world: World): void {
@@ -65,6 +67,6 @@ function textsOf(params: z.output<typeof body>): Partial<Pick<Customer, 'email' 
 
 export function customerRef(world: World, id: string | undefined): string | null {
   if (id === undefined) return null;
-  if (!world.state.customers.find(id)) throw invalid(`No such customer: '${id}'`, { code: 'resource_missing', param: 'customer' });
+  if (!world.state.customers.find(id)) throw missingRef('customer', id, 'customer');
   return id;
 }

@@ -1,8 +1,10 @@
+import type Stripe from 'stripe';
 import { z } from 'zod';
 import { acceptDispute, giveEvidence } from '../engine/disputes.js';
 import { missing } from '../http/api-error.js';
 import type { Operation } from '../http/api.js';
 import { createdFits, listPage } from '../http/list-page.js';
+import type { KnownParams } from '../http/known-params.js';
 import { mergedMetadata } from '../http/metadata.js';
 import { clearableText, created, metadata, onList, text, yesNo } from '../http/params.js';
 import type { Dispute } from '../objects/stored.js';
@@ -15,7 +17,7 @@ const evidence = z.strictObject({
   duplicate_charge_id: writing(), product_description: writing(), refund_policy_disclosure: writing(), refund_refusal_explanation: writing(),
   service_date: writing(), shipping_address: writing(), shipping_carrier: writing(), shipping_date: writing(), shipping_tracking_number: writing(),
   uncategorized_text: writing(),
-});
+} satisfies KnownParams<Stripe.DisputeUpdateParams.Evidence>);
 
 export function disputeRoutes(on: Operation, world: World): void {
   const { disputes, fraudWarnings } = world.state;

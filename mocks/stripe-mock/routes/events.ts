@@ -18,7 +18,7 @@ export function eventRoutes(on: Operation, world: World): void {
     return event;
   });
   on('GET', '/v1/events', z.strictObject({ ...onList, created: created(), type: text().optional(), types: z.array(text()).max(20).optional(), delivery_success: yesNo().optional() }), (params) => {
-    if (params.type !== undefined && params.types !== undefined) throw invalid('You may only specify one of these parameters: type, types.');
+    if (params.type !== undefined && params.types !== undefined) throw invalid('You may only specify one of these parameters: type, types.', { code: 'parameters_exclusive' });
     const patterns = params.types ?? (params.type === undefined ? ['*'] : [params.type]);
     const wanted = events
       .newestFirst()

@@ -1,3 +1,4 @@
+import type Stripe from 'stripe';
 import { z } from 'zod';
 import { methodFromAlias } from '../engine/payment-methods.js';
 import { attempt, cancelIntent, capture, createIntent, unexpected } from '../engine/payments.js';
@@ -6,6 +7,7 @@ import { refuseOddAmount } from '../engine/sessions.js';
 import { ApiError, invalid, missing, missingRef } from '../http/api-error.js';
 import type { Operation } from '../http/api.js';
 import { createdFits, listPage } from '../http/list-page.js';
+import type { KnownParams } from '../http/known-params.js';
 import { mergedMetadata } from '../http/metadata.js';
 import { clearableText, created, currency, email, metadata, onList, positive, text, webAddress, yesNo } from '../http/params.js';
 import { moneyText, smallestCharge } from '../objects/money.js';
@@ -19,7 +21,7 @@ const common = {
   metadata: metadata().optional(),
   receipt_email: email().optional(),
   payment_method: text().optional(),
-  payment_method_types: z.array(z.enum(['card', 'us_bank_account'])).min(1).optional(),
+  allowed_payment_method_types: z.array(z.enum(['card', 'us_bank_account'])).min(1).optional(),
   statement_descriptor_suffix: text(22).optional(),
 };
 const body = z.strictObject({
@@ -30,7 +32,7 @@ const body = z.strictObject({
   return_url: webAddress().optional(),
   capture_method: z.enum(['automatic', 'automatic_async', 'manual']).optional(),
   automatic_payment_methods: z.strictObject({ enabled: yesNo(), allow_redirects: z.enum(['always', 'never']).optional() }).optional(),
-});
+} satisfies KnownParams<Stripe.PaymentIntentCreateParams>);
 const CONFIRMABLE: readonly string[] = ['requires_payment_method', 'requires_confirmation', 'requires_action'];
 
 export function paymentIntentRoutes(on: Operation, world: World): void {
@@ -58,9 +60,9 @@ export function paymentIntentRoutes(on: Operation, world: World): void {
       metadata: mergedMetadata(null, params.metadata),
       receiptEmail: params.receipt_email ?? null,
       statementDescriptorSuffix: params.statement_descriptor_suffix ?? null,
-      ...(params.payment_method_types ? { paymentMethodTypes: params.payment_method_types } : {}),
+      allowedPaymentMethodTypes: params.allowed_payment_method_types ?? null,
       ...(params.capture_method ? { captureMethod: params.capture_method } : {}),
-      automatic: params.automatic_payment_methods?.enabled ?? params.payment_method_types === undefined,
+      automatic: params.automatic_payment_methods?.enabled ?? true,
     });
     if (params.payment_method) {
       intent.payment_method = methodOf(world, params.payment_method).id;
@@ -84,7 +86,7 @@ export function paymentIntentRoutes(on: Operation, world: World): void {
     intent.metadata = mergedMetadata(intent.metadata, params.metadata);
     return intent;
   });
-  on('POST', '/v1/payment_intents/:id/confirm', z.strictObject({ payment_method: text(), return_url: webAddress(), receipt_email: email() }).partial(), (params, id) =>
+  on('POST', '/v1/payment_intents/:id/confirm', z.strictObject({ payment_method: text(), return_url: webAddress(), receipt_email: email() } satisfies KnownParams<Stripe.PaymentIntentConfirmParams>).partial(), (params, id) =>
     confirm(world, ownOnly(found(id), 'confirm'), params.payment_method, params.return_url),
   );
   on('POST', '/v1/payment_intents/:id/capture', z.strictObject({ amount_to_capture: positive().optional(), metadata: metadata().optional() }), (params, id) => {

@@ -1,8 +1,10 @@
+import type Stripe from 'stripe';
 import { z } from 'zod';
 import { methodFromAccount, methodFromAlias, methodFromCard } from '../engine/payment-methods.js';
 import { invalid, missing, missingRef } from '../http/api-error.js';
 import type { Operation } from '../http/api.js';
 import { listPage } from '../http/list-page.js';
+import type { KnownParams } from '../http/known-params.js';
 import { mergedMetadata } from '../http/metadata.js';
 import { email, metadata, onList, positive, text } from '../http/params.js';
 import { NO_BILLING } from '../objects/new-payment-method.js';
@@ -16,7 +18,7 @@ const body = z.strictObject({
   us_bank_account: z.strictObject({ account_number: text(), routing_number: text(), account_holder_type: z.enum(['individual', 'company']).optional() }).optional(),
   billing_details: z.strictObject({ email: email(), name: text(), phone: text() }).partial().optional(),
   metadata: metadata().optional(),
-});
+} satisfies KnownParams<Stripe.PaymentMethodCreateParams>);
 
 export function paymentMethodRoutes(on: Operation, world: World): void {
   const { paymentMethods } = world.state;

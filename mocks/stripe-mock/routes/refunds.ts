@@ -1,8 +1,10 @@
+import type Stripe from 'stripe';
 import { z } from 'zod';
 import { createRefund } from '../engine/refunds.js';
 import { invalid, missing } from '../http/api-error.js';
 import type { Operation } from '../http/api.js';
 import { createdFits, listPage } from '../http/list-page.js';
+import type { KnownParams } from '../http/known-params.js';
 import { mergedMetadata } from '../http/metadata.js';
 import { created, metadata, onList, positive, text } from '../http/params.js';
 import type { Refund } from '../objects/stored.js';
@@ -14,7 +16,7 @@ const body = z.strictObject({
   amount: positive().optional(),
   reason: z.enum(['duplicate', 'fraudulent', 'requested_by_customer']).optional(),
   metadata: metadata().optional(),
-});
+} satisfies KnownParams<Stripe.RefundCreateParams>);
 
 export function refundRoutes(on: Operation, world: World): void {
   const { refunds } = world.state;
