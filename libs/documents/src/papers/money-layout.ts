@@ -245,7 +245,7 @@ export function signatureLines(labels: readonly string[]): Block {
   return {
     kind: 'columns',
     gapPt: 24,
-    columns: labels.map((label) => ({ share: 1, blocks: [{ kind: 'rule', ink: 'line', thicknessPt: 0.7 } as const, gap(2), words(label, TYPE.label, 'muted')] })),
+    columns: [...labels, ...(labels.length === 1 ? [''] : [])].map((label) => ({ share: 1, blocks: label === '' ? [] : [{ kind: 'rule', ink: 'line', thicknessPt: 0.7 } as const, gap(2), words(label, TYPE.label, 'muted')] })),
   };
 }
 

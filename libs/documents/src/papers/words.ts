@@ -171,7 +171,7 @@ export const MONEY = {
   toAnswer: 'To approve or decline, open',
   answerByPaper: 'To approve this quote, sign and return it, send a purchase order, or call us.',
   approvedBy: 'Name, date and signature',
-  quoteMeans: 'Work beyond this quote is not begun without your word. Prices hold for the day named above.',
+  quoteMeans: 'Work beyond this quote is not begun without your word. Prices hold until the day named above.',
   receivedFrom: 'Received from',
   receivedOn: 'Received on',
   how: 'Paid by',
