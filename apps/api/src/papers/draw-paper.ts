@@ -1,7 +1,6 @@
 import { existsSync } from 'node:fs';
 import { Worker } from 'node:worker_threads';
-import type { PaperFonts, PaperModel } from '@libs/documents';
-import { readPaperFonts } from './paper-fonts.js';
+import type { PaperModel } from '@libs/documents';
 
 export interface DrawRequest {
   readonly id: number;
@@ -33,7 +32,6 @@ export class PaperPress {
   private readonly waiting: Order[] = [];
   private drawing: Order | null = null;
   private worker: Worker | null = null;
-  private fonts: Promise<PaperFonts> | null = null;
   private lastId = 0;
   private closed = false;
 
@@ -83,9 +81,9 @@ export class PaperPress {
   }
 
   private async drawHere({ model }: DrawRequest): Promise<Uint8Array> {
-    const { drawPaper } = await import('@libs/documents');
-    this.fonts ??= readPaperFonts();
-    return drawPaper(model, await this.fonts);
+    // Loaded only where it is needed: a server that has its worker keeps the fonts and their parser out of this thread.
+    const here = await import('./draw-here.js');
+    return here.drawHere(model);
   }
 
   private drawInWorker(request: DrawRequest): Promise<Uint8Array> {
