@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { emailField, idField, lineField, pageOf, requiredLine, versionField } from './fields.js';
+import { emailField, idField, lineField, pageOf, pageQuery, requiredLine, versionField } from './fields.js';
 
 export const PAYMENT_TERMS = ['prepayment', 'account'] as const;
 
@@ -49,3 +49,6 @@ export type CustomerView = z.infer<typeof customerViewSchema>;
 
 export const customerRowSchema = z.strictObject({ id: idField, name: z.string(), city: z.string(), email: z.string(), openJobs: z.number().int(), machines: z.number().int() });
 export const customerPageSchema = pageOf(customerRowSchema);
+export type CustomerPage = z.infer<typeof customerPageSchema>;
+export const customerQuerySchema = z.strictObject({ ...pageQuery, q: z.string().trim().max(80).optional() });
+export type CustomerQuery = z.infer<typeof customerQuerySchema>;

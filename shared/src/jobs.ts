@@ -56,6 +56,20 @@ export const endJobSchema = z.strictObject({
 });
 export type EndJob = z.infer<typeof endJobSchema>;
 
+/** A manager moves a job to the newest acceptance limits, with the reason. */
+export const moveLimitsSchema = z.strictObject({ version: versionField, reason: requiredLine(400, 'Why is it judged by the newer limits?') });
+export type MoveLimits = z.infer<typeof moveLimitsSchema>;
+
+/** The machine goes out: who took it, and what was said. */
+export const recordDeliverySchema = z.strictObject({ version: versionField, receivedBy: requiredLine(80, 'Who takes it?'), words: textField(600).default('') });
+export type RecordDelivery = z.infer<typeof recordDeliverySchema>;
+export const deliverySchema = z.strictObject({ signOff: signOffSchema, paperId: idField, number: z.string() });
+export type Delivery = z.infer<typeof deliverySchema>;
+
+/** The tag of a job as it was last printed. */
+export const tagSchema = z.strictObject({ paperId: idField, number: z.string(), issuedAt: z.string() });
+export type Tag = z.infer<typeof tagSchema>;
+
 export const gateViewSchema = z.strictObject({ gate: z.enum(GATES), open: z.boolean(), before: z.enum(STEPS).nullable(), conditions: z.array(gateConditionSchema) });
 export type GateView = z.infer<typeof gateViewSchema>;
 
@@ -120,12 +134,18 @@ export const floorRowSchema = z.strictObject({
 });
 export type FloorRow = z.infer<typeof floorRowSchema>;
 export const floorPageSchema = pageOf(floorRowSchema);
+export type FloorPage = z.infer<typeof floorPageSchema>;
 export const floorStepsSchema = z.array(z.strictObject({ step: z.enum(STEPS), open: z.number().int(), onHold: z.number().int(), late: z.number().int() }));
+export type FloorSteps = z.infer<typeof floorStepsSchema>;
 
 export const createdJobSchema = z.strictObject({ id: idField, number: z.string() });
+export type CreatedJob = z.infer<typeof createdJobSchema>;
 
 export const searchHitSchema = z.strictObject({ kind: z.enum(['job', 'customer', 'machine', 'invoice']), id: idField, title: z.string(), detail: z.string(), path: z.string() });
+export const searchQuerySchema = z.strictObject({ q: z.string().trim().min(1, 'Type what you look for.').max(300) });
+export type SearchQuery = z.infer<typeof searchQuerySchema>;
 export const searchResultSchema = z.strictObject({ hits: z.array(searchHitSchema) });
+export type SearchResult = z.infer<typeof searchResultSchema>;
 export type SearchHit = z.infer<typeof searchHitSchema>;
 
 export const historyEntrySchema = z.strictObject({

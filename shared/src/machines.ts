@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { finite, idField, lineField, requiredLine, versionField } from './fields.js';
+import { finite, idField, lineField, pageOf, pageQuery, requiredLine, versionField } from './fields.js';
 
 export const MACHINE_KINDS = ['induction', 'slip-ring', 'synchronous', 'dc', 'ac-magnet', 'core-only'] as const;
 export const FRAME_MATERIALS = ['cast-iron', 'steel', 'aluminium', 'none', 'unknown'] as const;
@@ -64,3 +64,7 @@ export const machineViewSchema = z.strictObject({
 });
 export type MachineView = z.infer<typeof machineViewSchema>;
 export const machineRowSchema = z.strictObject({ id: idField, customerId: idField, customerName: z.string(), description: z.string(), serial: z.string(), visits: z.number().int(), lastJobNumber: z.string().nullable() });
+export const machinePageSchema = pageOf(machineRowSchema);
+export type MachinePage = z.infer<typeof machinePageSchema>;
+export const machineQuerySchema = z.strictObject({ ...pageQuery, customerId: idField.optional(), q: z.string().trim().max(80).optional() });
+export type MachineQuery = z.infer<typeof machineQuerySchema>;

@@ -7,7 +7,9 @@ import type { JobState, Route, Step } from '@shared/route';
 /** A visit of one machine. */
 @Entity('jobs')
 @Index('jobs_by_state_step', ['state', 'step'])
-@Index('jobs_by_promise', ['state', 'promisedOn'])
+@Index('jobs_by_promise', ['state', 'promisedOn', 'id'])
+@Index('jobs_by_number', ['state', 'number'])
+@Index('jobs_by_receipt', ['state', 'receivedAt', 'id'])
 @Index('jobs_by_customer', ['customerId'])
 @Index('jobs_by_machine', ['machineId'])
 export class Job {
