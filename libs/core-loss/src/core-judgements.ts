@@ -40,7 +40,24 @@ export function judgeFall(comparison: CoreComparison, limits: CoreLimits): Judge
   };
 }
 
-/** The limit at the flux of this test: heat goes with flux squared. */
+/**
+ * The hot-spot limit at the flux of this test: heat goes with flux squared, so a test at less flux must keep to less.
+ *
+ * `L = L₀·(B/B₀)²`
+ *
+ * | symbol | argument | unit | range |
+ * |---|---|---|---|
+ * | L₀ | `limitK` | K | as set by the shop |
+ * | B | `fluxDensityT` | T | as measured |
+ * | B₀ | `referenceFluxT` | T | the flux the limit is stated at, 1.32 |
+ *
+ * @returns K over the core's mean
+ *
+ * Standing: common practice.
+ * @example
+ * scaledHotSpotLimitK(10, 1, 1.32)
+ * // → 5.7
+ */
 export const scaledHotSpotLimitK = (limitK: number, fluxDensityT: number, referenceFluxT: number): number => limitK * (fluxDensityT / referenceFluxT) ** 2;
 
 /**

@@ -56,6 +56,21 @@ function setupProblems(input: CoreTestInput, say: Say): void {
  * @returns an empty list when `evaluateCoreTest` will accept the input
  *
  * Standing: common practice.
+ * @example
+ * const first = {
+ *   phase: 'before',
+ *   geometry: { kind: 'stator', outerDiameterM: 0.53, innerDiameterM: 0.34, slotDepthM: 0.044, slots: 72, stackLengthM: 0.37, ducts: 0, ductWidthM: 0, stackingFactor: 0.95, densityKgPerM3: 7700 },
+ *   target: { basis: 'standard', fluxDensityT: 1.32 },
+ *   frame: { state: 'in-frame', material: 'cast-iron' },
+ *   cablePath: 'over-frame',
+ *   massBasis: 'back-iron',
+ *   reading: { excitingTurns: 24, searchTurns: 4, searchVoltsV: 209.9, voltmeter: 'average', excitingA: 25.1, wattsW: 102.1, wattmeterLead: 'search', frequencyHz: 50 },
+ *   temperatures: { ambientC: 21, startC: 21, meanC: 26.9, hottestC: 30, minutes: 20 },
+ *   instruments: { wattmeterId: 'w-1', clampMeter: false },
+ *   checks: { rotorOut: true, leadsOpen: true, parallelsOpened: true, onePointEarthed: true, throughBoltsMeasured: true, boreClear: true, barrierUp: true },
+ * }
+ * coreTestProblems(first).map((p) => [p.path, p.code])
+ * // → [['reading.searchVoltsV', 'saturation']]
  */
 export function coreTestProblems(input: CoreTestInput): CoreTestProblem[] {
   const problems: CoreTestProblem[] = [];

@@ -110,6 +110,28 @@ function verdictOf(input: CoreTestInput, valid: boolean, judgements: readonly Ju
  * @throws OutOfRangeError with the path of the first figure that cannot be, as `coreTestProblems` names it
  *
  * Source: limits as noted in `limits.sources`; JCGM 106 and ISO 14253-1 for the verdicts. Standing: common practice.
+ * @example
+ * const first = {
+ *   phase: 'before',
+ *   geometry: { kind: 'stator', outerDiameterM: 0.53, innerDiameterM: 0.34, slotDepthM: 0.044, slots: 72, stackLengthM: 0.37, ducts: 0, ductWidthM: 0, stackingFactor: 0.95, densityKgPerM3: 7700 },
+ *   target: { basis: 'standard', fluxDensityT: 1.32 },
+ *   frame: { state: 'in-frame', material: 'cast-iron' },
+ *   cablePath: 'over-frame',
+ *   massBasis: 'back-iron',
+ *   reading: { excitingTurns: 24, searchTurns: 4, searchVoltsV: 20.99, voltmeter: 'average', excitingA: 25.1, wattsW: 102.1, wattmeterLead: 'search', frequencyHz: 50 },
+ *   temperatures: { ambientC: 21, startC: 21, meanC: 26.9, hottestC: 30, minutes: 20 },
+ *   instruments: { wattmeterId: 'w-1', clampMeter: false },
+ *   checks: { rotorOut: true, leadsOpen: true, parallelsOpened: true, onePointEarthed: true, throughBoltsMeasured: true, boreClear: true, barrierUp: true },
+ * }
+ * const before = { input: first, result: evaluateCoreTest(first, DEFAULT_CORE_LIMITS) }
+ * before.result.wattsPerKgReferred
+ * // → 2.959
+ * const second = { ...first, phase: 'after', reading: { ...first.reading, searchVoltsV: 21.06, excitingA: 25.4, wattsW: 98.63 }, temperatures: { ambientC: 22, startC: 23, meanC: 28.7, hottestC: 31.3, minutes: 20 } }
+ * const after = evaluateCoreTest(second, DEFAULT_CORE_LIMITS, before)
+ * after.comparison.increase
+ * // → -0.040
+ * after.verdict
+ * // → 'conforms'
  */
 export function evaluateCoreTest(
   input: CoreTestInput,

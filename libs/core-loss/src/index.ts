@@ -7,6 +7,7 @@ export type * from './core-test.js';
 export { CORE_LOSS_CALCULATION, evaluateCoreTest } from './evaluate-core-test.js';
 export { FIELD_BAND, hRmsEstimate, type CoreSteel } from './field-estimate.js';
 export { STEEL_HEAT_J_PER_KG_K, lossFromHeating, meanRiseEstimateK } from './heating.js';
+export { planSetups, setupObstacles, type SetupRequest } from './plan-setups.js';
 export {
   CLAMP_READING_UNCERTAINTY,
   DEFAULT_READING_UNCERTAINTY,
