@@ -1,3 +1,4 @@
+import { AsyncResource } from 'node:async_hooks';
 import { Injectable, Logger, type OnApplicationBootstrap, type OnApplicationShutdown } from '@nestjs/common';
 import { Clock } from '../clock/clock.js';
 import { ReadDb } from '../database/read-db.js';
@@ -34,7 +35,8 @@ export class OutboxWorker implements OnApplicationBootstrap, OnApplicationShutdo
     private readonly papers: PapersService,
     outbox: OutboxService,
   ) {
-    outbox.onPromise(() => this.soon(50));
+    // a promise is given inside a unit of work; the worker that keeps it must not inherit that unit
+    outbox.onPromise(AsyncResource.bind(() => this.soon(50)));
   }
 
   onApplicationBootstrap(): void {
