@@ -36,7 +36,7 @@ export function page(parts: PageParts): string {
 </head>
 <body>
 <header>${MARK}<strong>${parts.name}</strong>${parts.links && html`<nav>${parts.links.map((link) => html`<a href="${link.href}">${link.text}</a>`)}</nav>`}</header>
-${parts.strip && html`<div class="strip" role="note">${parts.strip}</div>`}
+${parts.strip && html`<aside class="strip" aria-label="About this page">${parts.strip}</aside>`}
 <main class="${parts.wide ? 'wide' : ''}">
 ${parts.body}
 </main>

@@ -54,11 +54,14 @@ fieldset{border:0;margin:0;padding:0}
 table{width:100%;border-collapse:collapse;background:var(--card);border:1px solid var(--hair);font-size:14px}
 th,td{text-align:left;vertical-align:top;padding:8px 12px;border-bottom:1px solid var(--hair)}
 th{font-weight:600;color:var(--muted)}
+th,td{overflow-wrap:normal}
+td button{white-space:nowrap}
 td.n{font-variant-numeric:tabular-nums;white-space:nowrap}
 td form{display:inline}
 td button{min-height:32px;padding:2px 10px;font-size:14px}
 .row{display:flex;flex-wrap:wrap;gap:12px;align-items:end}
 .row>*{flex:1 1 170px}
+.row>label:has(select){flex-basis:230px}
 .row>button{flex:0 0 auto}
 .row label{margin:0}
 .tools{display:flex;flex-wrap:wrap;gap:8px;margin:12px 0}

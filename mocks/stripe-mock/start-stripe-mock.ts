@@ -106,8 +106,13 @@ export async function startStripeMock(options: StripeMockOptions): Promise<Strip
   settings.publicUrl = options.publicUrl?.replace(/\/$/, '') ?? url;
   if (options.webhookUrl) useConfiguredEndpoint(world, options.webhookUrl, options.webhookSecret);
   agenda.start((item) => {
-    if (item.kind === 'webhook.attempt') webhooks.attemptAgain(item.id);
-    else actOnAgenda(world, item);
+    try {
+      if (item.kind === 'webhook.attempt') webhooks.attemptAgain(item.id);
+      else actOnAgenda(world, item);
+    } catch (error) {
+      // One act that fails must not take the service down with it.
+      process.stderr.write(`${item.kind} ${item.id}: ${error instanceof Error ? error.stack : String(error)}\n`);
+    }
     changed();
   });
   webhooks.resume();

@@ -1,7 +1,7 @@
 import { isDisputeReason } from '../objects/new-dispute.js';
 import type { AgendaItem } from '../store/agenda.js';
 import type { World } from '../world.js';
-import { decide, openDispute, warnOfFraud } from './disputes.js';
+import { decide, disputable, openDispute, warnOfFraud } from './disputes.js';
 import { settleDebit } from './payments.js';
 import { failRefund, settleRefund } from './refunds.js';
 import { expireSession } from './sessions.js';
@@ -20,7 +20,7 @@ export function actOnAgenda(world: World, item: AgendaItem): void {
   if (item.kind === 'debit.settle' && intent) settleDebit(world, intent);
   if (item.kind === 'dispute.decide' && dispute && dispute.status.endsWith('under_review')) decide(world, dispute, item.detail === 'won' ? 'won' : 'lost');
   if (item.kind === 'fraud.warn' && charge) warnOfFraud(world, charge);
-  if (item.kind === 'dispute.open' && charge && charge.amount > charge.amount_refunded) {
+  if (item.kind === 'dispute.open' && charge && disputable(world, charge) > 0) {
     const plan: { reason: unknown; inquiry: unknown; share: unknown } = JSON.parse(item.detail ?? '{}');
     openDispute(world, charge, {
       amount: Math.ceil(charge.amount * (typeof plan.share === 'number' ? plan.share : 1)),

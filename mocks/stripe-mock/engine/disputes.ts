@@ -8,11 +8,18 @@ import { book } from './balance.js';
 
 export const disputesOf = (world: World, charge: Charge): Dispute[] => world.state.disputes.where((dispute) => dispute.charge === charge.id);
 
+const OVER: readonly string[] = ['won', 'warning_closed'];
+
+/** What is left of a charge to be disputed: what was neither paid back nor is disputed already. */
+export function disputable(world: World, charge: Charge, but?: Dispute): number {
+  const claimed = disputesOf(world, charge).filter((dispute) => dispute !== but && !OVER.includes(dispute.status));
+  return charge.status === 'succeeded' ? charge.amount - charge.amount_refunded - claimed.reduce((sum, dispute) => sum + dispute.amount, 0) : 0;
+}
+
 /** The holder tells their bank that they will not pay. An inquiry only asks; a chargeback takes the money at once. */
 export function openDispute(world: World, charge: Charge, facts: { amount?: number | undefined; reason: DisputeReason; inquiry: boolean }): Dispute {
-  const claimed = disputesOf(world, charge).filter((dispute) => dispute.status !== 'won' && dispute.status !== 'warning_closed');
-  const left = charge.amount - charge.amount_refunded - claimed.reduce((sum, dispute) => sum + dispute.amount, 0);
-  if (charge.status !== 'succeeded' || left <= 0) throw invalid(`Charge ${charge.id} has nothing left to dispute.`);
+  const left = disputable(world, charge);
+  if (left <= 0) throw invalid(`Charge ${charge.id} has nothing left to dispute.`);
   const amount = Math.min(left, facts.amount ?? left);
   const dispute = world.state.disputes.add(newDispute(charge, { amount, reason: facts.reason, inquiry: facts.inquiry }, world.clock.seconds()));
   charge.disputed = true;
@@ -53,7 +60,11 @@ export function decide(world: World, dispute: Dispute, outcome: 'won' | 'lost'):
   if (dispute.status === 'won' || dispute.status === 'lost' || dispute.status === 'warning_closed') throw invalid(`This dispute is closed: ${dispute.status}.`);
   const before = { status: dispute.status };
   const inquiry = dispute.status.startsWith('warning_');
-  if (inquiry && outcome === 'lost') {
+  const charge = world.state.charges.find(dispute.charge);
+  const left = charge ? disputable(world, charge, dispute) : 0;
+  if (inquiry && outcome === 'lost' && left > 0) {
+    // What was paid back since the question was asked is not taken a second time.
+    dispute.amount = Math.min(dispute.amount, left);
     dispute.status = 'needs_response';
     dispute.is_charge_refundable = false;
     dispute.evidence_details.has_evidence = false;

@@ -31,7 +31,7 @@ export function payPage(face: PayFace): string {
     html`
 ${orderCard(face, sum)}
 ${face.failure && html`<div class="note bad" role="alert"><p><b>${TEXT.lastTry}</b></p><p>${face.failure}</p></div>`}
-${face.filled && html`<div class="note good" role="status"><p>${TEXT.filled(face.filled)}</p></div>`}
+${face.filled && html`<div class="note" role="status"><p>${TEXT.filled(face.filled)}</p></div>`}
 ${session.amount_total === 0 ? freeForm(face) : [takesCards && cardForm(face, sum), takesDebits && bankForm(face, sum)]}`,
   );
 }

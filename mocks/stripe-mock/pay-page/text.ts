@@ -19,7 +19,7 @@ export const TEXT = {
   back: 'Go back without paying',
   testCards: 'Test cards',
   testCardsHint: 'Tap one to fill in the form; nothing is paid until you press the pay button.',
-  filled: (what: string) => `Filled in: ${what}. Check it and press the pay button.`,
+  filled: (what: string) => `The form holds the test card “${what}”. Nothing is paid yet: press the pay button.`,
   bank: 'Pay from a bank account',
   bankHint: 'The order counts at once, the money arrives later or fails.',
   testAccountsHint: 'Test accounts: tap one to fill it in.',
