@@ -1,0 +1,4 @@
+export { MACHINE_TESTS_CALCULATION, type MachineTest, type MachineTestProblem, type TestJudgement } from './judgement.js';
+export { DEFAULT_MACHINE_TEST_LIMITS, type MachineTestLimit, type MachineTestLimitKey, type MachineTestLimits, type Standing } from './limits.js';
+export { BEFORE_VARNISH_PARTS, FINAL_TEST_PARTS } from './readings.js';
+export type * from './readings.js';
