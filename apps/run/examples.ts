@@ -1,6 +1,6 @@
 /**
  * Runs every @example of the libraries. An example is plain code; a line `// → value` says what the expression before it
- * gives. Every export of the library is in scope. Numbers are compared to the digits that are printed, so that
+ * gives. Every export of the library is in scope, and of the file itself. Numbers are compared to the digits that are printed, so that
  * `// → 2.84` holds for 2.8401 and fails for 2.85; `// → throws Name` holds when that error is thrown.
  * Names of libraries behind the command limit the run to them.
  */
@@ -151,7 +151,7 @@ for (const library of readdirSync(join(root, 'libs')).sort()) {
   try {
     const scope = await open(door);
     for (const example of examples) {
-      const problems = check(example, scope);
+      const problems = check(example, { ...scope, ...(await open(example.file)) });
       if (problems.length > 0) failed += 1;
       for (const problem of problems) console.error(`${relative(root, example.file)}:${example.line} ${problem}`);
     }

@@ -24,7 +24,7 @@ function temperatureProblems(t: Partial<CoreTemperatures>, slots: number, say: S
   if (finite(coolestC) && finite(hottestC) && hottestC < coolestC && meanC === undefined) {
     say('temperatures.hottestC', 'order', 'The hottest place cannot be cooler than the coolest.');
   }
-  if (hottestSlot !== undefined && !(Number.isInteger(hottestSlot) && hottestSlot >= 1 && hottestSlot <= slots)) {
+  if (hottestSlot !== undefined && Number.isInteger(slots) && !(Number.isInteger(hottestSlot) && hottestSlot >= 1 && hottestSlot <= slots)) {
     say('temperatures.hottestSlot', 'slot', `Number the slot from 1 to ${slots}.`);
   }
 }
@@ -37,7 +37,8 @@ function setupProblems(input: CoreTestInput, say: Say): void {
   if (frame.state === 'in-frame' && frame.material === 'none') say('frame.material', 'frame-material', 'The core is in its frame: say what the frame is made of.');
   if (frame.state === 'bare' && cablePath === 'over-frame') say('cablePath', 'cable-path', 'A bare core has no frame for the cable to run over.');
   const paths = geometry.kind === 'stator' ? STATOR_PATHS : ARMATURE_PATHS;
-  if (!paths.includes(cablePath)) {
+  const known = geometry.kind === 'stator' || geometry.kind === 'armature';
+  if (known && !paths.includes(cablePath)) {
     say('cablePath', 'cable-path', geometry.kind === 'stator' ? 'A stator has no spider, shaft or vents of its own to run the cable through.' : 'An armature has no frame for the cable to run over.');
   }
   const target = input.target.fluxDensityT;

@@ -275,6 +275,9 @@ describe('Every judgement carries its source and standing, and none claims a sta
 });
 
 describe('What cannot be evaluated is refused with its path', () => {
+  it('a before test that cannot be is named as the before test', () => {
+    expect(() => evaluateCoreTest(second, limits, { ...before, input: withReading(first, { wattsW: NaN }) })).toThrow(/^The before test: /);
+  });
   it.each<[string, CoreTestInput, string]>([
     ['no watts', withReading(first, { wattsW: 0 }), 'reading.wattsW'],
     ['NaN volts', withReading(first, { searchVoltsV: NaN }), 'reading.searchVoltsV'],

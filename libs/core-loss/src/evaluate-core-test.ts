@@ -36,9 +36,19 @@ function reduceTest(input: CoreTestInput): Reduced & { geometry: ReturnType<type
 const sameVoltmeter = (a: CoreTestInput, b: CoreTestInput) =>
   a.instruments.voltmeterId === b.instruments.voltmeterId && a.reading.voltmeter === b.reading.voltmeter;
 
+/** A stored before test that cannot be reduced is named as such, not as a slip in the test at hand. */
+function reduceBefore(input: CoreTestInput): Reduced {
+  try {
+    return reduceTest(input);
+  } catch (error) {
+    if (!(error instanceof OutOfRangeError)) throw error;
+    throw new OutOfRangeError(`before.${error.field}`, `The before test: ${error.message}`);
+  }
+}
+
 /** Both losses are referred to the target of the before test; what is one core's size cancels in the ratio. */
 function compare(after: Reduced, before: BeforeTest, afterValid: boolean, limits: CoreLimits, uncertainty: ReadingUncertainty): CoreComparison {
-  const first = reduceTest(before.input);
+  const first = reduceBefore(before.input);
   const target = before.input.target.fluxDensityT;
   const referred = ({ reduced }: Reduced) => referLoss(reduced.wattsPerKg, reduced.fluxDensityT, target, FLUX_EXPONENT);
   const ratio = referred(after) / referred(first);
