@@ -2,3 +2,5 @@ export { MACHINE_TESTS_CALCULATION, type MachineTest, type MachineTestProblem, t
 export { DEFAULT_MACHINE_TEST_LIMITS, type MachineTestLimit, type MachineTestLimitKey, type MachineTestLimits, type Standing } from './limits.js';
 export { BEFORE_VARNISH_PARTS, FINAL_TEST_PARTS } from './readings.js';
 export type * from './readings.js';
+export { CORRECTION_RANGE_C, insulationCorrectionTo40C, insulationMinimum, insulationTestVolts, polarizationIndex } from './insulation.js';
+export { COPPER_ZERO_C, resistanceAt, riseByResistanceK, unbalanceFraction } from './winding-resistance.js';
