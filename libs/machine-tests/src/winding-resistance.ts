@@ -68,7 +68,7 @@ export function riseByResistanceK(coldOhm: number, coldC: number, hotOhm: number
  *
  * | symbol | argument | unit | range |
  * |---|---|---|---|
- * | x_i | `values` | V, A or Ω | three or more, each more than 0 |
+ * | x_i | `values` | V, A or Ω | two or more, each more than 0 |
  *
  * @returns a fraction: 0.0104 is 1.04 %
  * @throws OutOfRangeError when fewer than two values are given or one is not more than 0
