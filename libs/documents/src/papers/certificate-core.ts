@@ -50,7 +50,7 @@ function judgementTable(judgements: readonly Judgement[], model: CertificateMode
     kind: 'table',
     sizePt: TYPE.table,
     paddingPt: 2.2,
-    columns: [{ widthPt: 104 }, { widthPt: 84, align: 'right' }, { widthPt: 54, align: 'right' }, { widthPt: 96 }, { share: 1 }],
+    columns: [{ widthPt: 92 }, { widthPt: 80, align: 'right' }, { widthPt: 48, align: 'right' }, { widthPt: 96 }, { share: 1 }],
     head: [muted(CERTIFICATE.judged), muted(`${CERTIFICATE.measured} ± U`), muted(CERTIFICATE.limit), muted(CERTIFICATE.verdict), muted(CERTIFICATE.source)],
     rows: judgements.flatMap((judgement): TableRow[] => {
       const reasons = judgement.reasons.map((reason) => reason.words).join(' ');
@@ -77,7 +77,7 @@ export function sourceWords(source: string, standing: string): string {
 function valueRuns(judgement: Judgement, value: number | undefined, units: PaperUnits, uncertainty?: number): Run[] {
   if (value === undefined) return [{ text: '—', ink: 'muted' }];
   const band = (text: string): Run[] => [{ text: `\u00a0±\u00a0${text}`, ink: 'muted' }];
-  if (judgement.unit === '1') return [{ text: signedPercent(value) }, ...(uncertainty === undefined ? [] : band(points(uncertainty)))];
+  if (judgement.unit === '1') return [{ text: judgement.test === 'fall' ? `${points(value)}\u00a0%` : signedPercent(value) }, ...(uncertainty === undefined ? [] : band(points(uncertainty)))];
   const kind = judgement.unit === 'K' ? 'temperature-difference' : 'specific-loss';
   if (uncertainty === undefined) return figureRuns(value, kind, units);
   const [figure, ...unit] = figureRuns(value, kind, units);

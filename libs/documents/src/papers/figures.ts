@@ -21,10 +21,10 @@ export function figureRuns(value: number | null | undefined, kind: Kind, units: 
   return unit === '' ? [figure] : [figure, { text: `${unit === '°' ? '' : '\u00a0'}${unit}`, ink: 'muted' }];
 }
 
-/** As a plate says it: four figures that count, no empty decimals. */
-export function plateWords(value: number | null | undefined, kind: Kind, units: PaperUnits): string {
+/** As a plate says it: four figures that count unless told, no empty decimals. */
+export function plateWords(value: number | null | undefined, kind: Kind, units: PaperUnits, significant = 4): string {
   if (!isNumber(value)) return '';
-  const text = formatQuantity(value, kind, units, { significant: 4, unit: false });
+  const text = formatQuantity(value, kind, units, { significant, unit: false });
   const unit = unitOf(kind, units);
   const short = text.includes('.') ? text.replace(/\.?0+$/, '') : text;
   return withMinus(short) + (unit === '' ? '' : `\u00a0${unit}`);

@@ -1,12 +1,12 @@
+import { spineDrawing } from '@libs/drawings';
 import { ROUTE_STEPS } from '@shared/route';
 import { type Block, gap } from '../press/blocks.js';
 import { code128Mark, qrMark } from '../press/codes.js';
 import { bodyWidth } from '../press/make-pages.js';
-import type { Mark } from '../press/marks.js';
 import type { TagModel } from './counter-papers-model.js';
 import { dayOf, dayWords } from './dates.js';
 import { LABEL, type LaidPaper } from './frame-of-paper.js';
-import { COMMON, COUNTER, ROUTE_WORDS } from './words.js';
+import { COMMON, COUNTER, ROUTE_WORDS, STEP_WORDS } from './words.js';
 
 const QR_PT = 66;
 const BARS_PT = 21;
@@ -66,22 +66,14 @@ export function layoutTag(model: TagModel): LaidPaper {
   };
 }
 
-/** Sheets standing side by side: done dark, the open one copper and taller, those to come outlined. */
+/** The route at a glance, as it stands in every table row on screen. */
 function spine(model: TagModel): Block {
   const steps = ROUTE_STEPS[model.route];
   const open = steps.indexOf(model.step);
-  const pitch = Math.min(7, 100 / steps.length);
-  const marks: Mark[] = steps.map((_, index): Mark => {
-    const isOpen = index === open;
-    const ink = index < open ? 'text' : isOpen ? 'copper' : undefined;
-    return {
-      kind: 'rect',
-      x: index * pitch,
-      y: isOpen ? 0 : 2,
-      widthPt: pitch - 2,
-      heightPt: isOpen ? 13 : 9,
-      ...(ink ? { fill: ink } : { stroke: 'line', thicknessPt: 0.6 }),
-    };
+  const drawing = spineDrawing({
+    variant: 'mini',
+    sheets: steps.map((step, index) => ({ id: step, label: STEP_WORDS[step], state: index < open ? 'done' : index === open ? 'open' : 'to-come', gate: 'none' })),
   });
-  return { kind: 'marks', widthPt: steps.length * pitch - 2, heightPt: 13, marks, align: 'right' };
+  const heightPt = 13;
+  return { kind: 'drawing', drawing, widthPt: (drawing.width * heightPt) / drawing.height, align: 'right' };
 }

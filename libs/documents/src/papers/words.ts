@@ -321,3 +321,10 @@ export const READINGS = {
   path: 'Mean path',
   mass: 'Mass of back iron',
 } as const;
+
+export const DRAWINGS = {
+  before: 'before',
+  after: 'after',
+  afterNumber: (number: number) => `after, ${number}`,
+  turns: (turns: number, volts: string) => `${turns} ${turns === 1 ? 'turn' : 'turns'}, ${volts} each`,
+} as const;
