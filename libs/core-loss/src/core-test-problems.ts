@@ -86,11 +86,23 @@ export function coreTestProblems(input: CoreTestInput): CoreTestProblem[] {
   return problems;
 }
 
+/** Below these a reading is a lead that fell off or a unit that was mistaken: real ring tests run at 0.05 and more. */
+const LEAST_FLUX_T = 0.01;
+const LEAST_POWER_FACTOR = 0.005;
+/** µ₀ times a relative permeability that no lamination steel has (T per A/m). */
+const MOST_PERMEABILITY = 4e-7 * Math.PI * 1e5;
+
 function reducedProblems(input: CoreTestInput, say: Say): void {
   try {
-    const { fluxDensityT, powerFactor } = reduceReading(input.reading, deriveGeometry(input.geometry));
+    const { fluxDensityT, powerFactor, fieldRmsAPerM } = reduceReading(input.reading, deriveGeometry(input.geometry));
     if (fluxDensityT > SATURATION_T) {
       say('reading.searchVoltsV', 'saturation', `These volts make ${fluxDensityT.toFixed(2)} T, which no steel carries. Check volts, search turns and the size of the core.`);
+    }
+    if (!(fluxDensityT >= LEAST_FLUX_T)) say('reading.searchVoltsV', 'no-flux', 'These volts make next to no flux. Check the search coil, its turns and the unit.');
+    else if (!(fieldRmsAPerM * MOST_PERMEABILITY >= fluxDensityT)) {
+      say('reading.excitingA', 'field-low', 'No steel carries this flux on so little current. Check the current, its range and the exciting turns.');
+    } else if (!(powerFactor >= LEAST_POWER_FACTOR)) {
+      say('reading.wattsW', 'power-factor-low', 'The watts are next to nothing beside volts times amps. Check the leads and the range of the wattmeter, and the current.');
     }
     if (powerFactor > 1) {
       say('reading.wattsW', 'power-factor', 'The watts are more than volts times amps. Check the watts, the current and where the wattmeter lead sat.');
