@@ -6,7 +6,7 @@ import { type LaidPaper, sheetFrame } from './frame-of-paper.js';
 import { nameplateFields } from './machine-words.js';
 import { opening, signatureLines } from './money-layout.js';
 import { TYPE, fields, heading, shopLine } from './paper-head.js';
-import { COMMON, CONTAMINATION_WORDS, COUNTER, ROUTE_WORDS } from './words.js';
+import { COMMON, CONTAMINATION_WORDS, COUNTER, MONEY, ROUTE_WORDS } from './words.js';
 
 const LABEL_PT = 104;
 
@@ -77,7 +77,7 @@ export function layoutDeliveryNote(model: DeliveryNoteModel): LaidPaper {
       sizePt: TYPE.money,
       paddingPt: 3.4,
       columns: [{ share: 5 }, { widthPt: 70, align: 'right' }, { share: 3 }],
-      head: [cell(COUNTER.item, { ink: 'muted' }), cell('', { align: 'right' }), cell(COUNTER.remark, { ink: 'muted' })],
+      head: [cell(COUNTER.item, { ink: 'muted' }), cell(MONEY.quantity, { ink: 'muted' }), cell(COUNTER.remark, { ink: 'muted' })],
       rows: model.items.map((item) => ({ cells: [cell(item.description), cell(item.quantity), cell(item.remark, { ink: 'muted' })] })),
     },
     ...(model.remark.trim() === '' ? [] : [gap(10), words(model.remark, TYPE.money)]),
