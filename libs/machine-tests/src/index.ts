@@ -7,3 +7,7 @@ export { COPPER_ZERO_C, resistanceAt, riseByResistanceK, unbalanceFraction } fro
 export { highPotentialLevel, type HighPotentialLevel, type HighPotentialRequest } from './high-potential.js';
 export { LOW_VOLTS_SHARE, noLoadLosses, noLoadSeparation, type NoLoadLosses, type NoLoadSeparation } from './no-load.js';
 export { LEAST_SHAFT_HEIGHT_M, vibrationLimit } from './vibration.js';
+export type { MachineTestEvaluation } from './evaluation.js';
+export { evaluateBeforeVarnish, evaluateIncomingTest, type IncomingPart, type WindingTestDerived } from './evaluate-winding-test.js';
+export { judgeAgainstAsFound, type InsulationDerived, type WindingResistanceDerived } from './judge-winding.js';
+export { beforeVarnishProblems, incomingTestProblems, insulationWarnings } from './reading-problems.js';
