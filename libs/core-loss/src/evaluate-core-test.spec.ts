@@ -203,6 +203,7 @@ describe('The hot spot is judged over the mean', () => {
   });
   it('a warm start is no test even of a large spot', () => {
     expect(judge(spot(20, { startC: 60 }), 'hot-spot')?.verdict).toBe('not-valid');
+    expect(judge(spot(20, { startC: 60, minutes: 5 }), 'hot-spot')?.verdict).toBe('not-valid');
   });
   it('below 95 % of the target flux it is not judged', () => {
     expect(codes(judge(atShare(first, 0.94), 'hot-spot')?.reasons)).toEqual(['hot-spot-flux']);
