@@ -11,3 +11,6 @@ export type { MachineTestEvaluation } from './evaluation.js';
 export { evaluateBeforeVarnish, evaluateIncomingTest, type IncomingPart, type WindingTestDerived } from './evaluate-winding-test.js';
 export { judgeAgainstAsFound, type InsulationDerived, type WindingResistanceDerived } from './judge-winding.js';
 export { beforeVarnishProblems, incomingTestProblems, insulationWarnings } from './reading-problems.js';
+export { evaluateFinalTest, type FinalTestDerived } from './evaluate-final-test.js';
+export { finalTestProblems } from './final-test-problems.js';
+export { judgeNoLoadLevel, type BearingDerived, type NoLoadDerived, type VibrationDerived } from './judge-running.js';
