@@ -10,8 +10,10 @@ import { ErrorFilter } from './http/error.filter.js';
 import { HealthController } from './http/health.controller.js';
 import { schemaPipe } from './http/schema.pipe.js';
 import { IdempotencyInterceptor } from './idempotency/idempotency.interceptor.js';
+import { InvoicesModule } from './invoices/invoices.module.js';
 import { OutboxModule } from './outbox/outbox.module.js';
 import { PapersModule } from './papers/papers.module.js';
+import { PaymentsModule } from './payments/payments.module.js';
 import { QuotesModule } from './quotes/quotes.module.js';
 import { ShopModule } from './shop/shop.module.js';
 import { UsersModule } from './users/users.module.js';
@@ -21,7 +23,7 @@ export class AppModule {
   static register(config: Config): DynamicModule {
     return {
       module: AppModule,
-      imports: [ConfigModule.register(config), ClockModule, DatabaseModule, HistoryModule, ShopModule, PapersModule, OutboxModule, AuthModule, UsersModule, QuotesModule],
+      imports: [ConfigModule.register(config), ClockModule, DatabaseModule, HistoryModule, ShopModule, PapersModule, OutboxModule, AuthModule, UsersModule, QuotesModule, InvoicesModule, PaymentsModule],
       controllers: [HealthController],
       providers: [
         { provide: APP_PIPE, useFactory: schemaPipe },

@@ -37,3 +37,7 @@ export function invoiceMail(mail: InvoiceMail): WrittenMail {
     ...mailLayout({ shopName: mail.shopName, heading: `Invoice ${mail.invoiceNumber}`, paragraphs, ...(mail.portalUrl ? { link: { label, url: mail.portalUrl } } : {}) }),
   };
 }
+
+/** The shop's account in one line; '' where none is given. */
+export const bankWords = (bank: { readonly accountHolder: string; readonly iban: string; readonly bic: string; readonly bankName: string } | null): string =>
+  bank ? [bank.accountHolder, `IBAN ${bank.iban}`, ...(bank.bic ? [`BIC ${bank.bic}`] : []), bank.bankName].filter((part) => part !== '').join(', ') : '';
