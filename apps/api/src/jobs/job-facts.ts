@@ -25,8 +25,12 @@ export interface SignOffFact {
   readonly refersTo: string | null;
   readonly byUserId: string;
   readonly byName: string;
+  readonly byRoles: string;
+  readonly at: string;
+  readonly reason: string;
   readonly contentHash: string;
   readonly detail: Record<string, unknown>;
+  readonly version: number;
 }
 
 /** Everything the gates of one job decide on, loaded beforehand. */

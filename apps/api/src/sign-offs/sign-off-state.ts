@@ -42,8 +42,8 @@ export function concessionProblem(facts: JobFacts, record: RecordFact, decisionI
 }
 
 export function inconclusiveProblem(facts: JobFacts, record: RecordFact): SignProblem | null {
-  const core = coreAfter(facts);
-  if (core.kind !== 'inconclusive' || core.record.id !== record.id) return problem('STATE_NOT_RIGHT', 'Only the newest core test after, and only an inconclusive one, is released this way.');
+  const core = record.kind === 'core-test-before' ? coreBefore(facts) : coreAfter(facts);
+  if (core.kind !== 'inconclusive' || core.record.id !== record.id) return problem('STATE_NOT_RIGHT', 'Only the core test that counts, and only an inconclusive one, is released this way.');
   if (core.releasedBy) return problem('ALREADY_DONE', 'It is released already.');
   if (facts.limits.core.decisionRule === 'refuse') return problem('STATE_NOT_RIGHT', 'The shop’s decision rule does not let an inconclusive test pass: repeat it.');
   return null;
