@@ -1,4 +1,5 @@
 import { geometryProblems, type CoreGeometry } from '@libs/core-loss';
+import { formatQuantity, toShown, unitOf, type UnitSystem } from '@libs/quantities';
 import type { Drawing, Paint, Shape } from './drawing.js';
 import { arcTo, circlePath, lineTo, moveTo, polar, sectorPath, type Point } from './pen.js';
 
@@ -9,7 +10,7 @@ export interface RingDrawingInput {
   readonly turns: number;
   /** what stands in the middle: the figure as typed, its unit, and a line below */
   readonly reading?: { readonly figure: string; readonly unit: string; readonly below?: string };
-  /** words beside the cable, such as '24 turns, 5.26 V each' */
+  /** words beside the cable, such as '24 turns, 5.26 V each'; where more turns are planned than can be drawn, the count stands there anyway */
   readonly cableWords?: string;
   /** kelvin over the core's mean by slot, slot 1 at the top, clockwise */
   readonly heat?: ReadonlyMap<number, number>;
@@ -18,6 +19,8 @@ export interface RingDrawingInput {
   readonly hottestSlot?: number;
   readonly fluxPath?: boolean;
   readonly title?: string;
+  /** for the words and the table behind the drawing; SI unless told */
+  readonly units?: UnitSystem;
 }
 
 const SIZE = { width: 300, height: 272 } as const;
@@ -26,7 +29,7 @@ const OUTER = 112;
 const SLOT_SHARE = 0.54;
 const MOST_CABLES = 24;
 /** The cable comes round at the lower right, clear of the flux arrow. */
-const CABLE_AT = (126 * Math.PI) / 180;
+const CABLE_AT = (135 * Math.PI) / 180;
 
 interface Radii {
   readonly outer: number;
@@ -62,8 +65,8 @@ export function ringDrawing(input: RingDrawingInput): Drawing {
     ...SIZE,
     title,
     description: describe(g, input),
-    shapes: [...iron(g, r, input), ...fluxArrow(r, input.fluxPath ?? true), ...cable(r, input.turns), ...middle(g, r, input), ...cableLine(input)],
-    ...(input.heat ? { table: heatTable(input.heat) } : {}),
+    shapes: [...iron(g, r, input), ...fluxArrow(r, input.fluxPath ?? true), ...cable(r, input.turns), ...hotSpot(g, r, input.hottestSlot), ...middle(r, input), ...cableLine(input)],
+    ...(input.heat ? { table: heatTable(input.heat, input.units ?? 'si') } : {}),
   };
 }
 
@@ -114,7 +117,7 @@ function iron(g: CoreGeometry, r: Radii, input: RingDrawingInput): Shape[] {
     shapes.push({ kind: 'path', d: sectorPath(CENTRE, teeth.from, teeth.to, middle + pitch / 2 - tooth, middle + pitch / 2 + tooth), fill, mark });
   }
   shapes.push({ kind: 'path', d: circlePath(CENTRE, g.kind === 'stator' ? r.outer : r.inner), stroke: 'text', strokeWidth: 1.5 });
-  return [...shapes, ...hotSpot(g, r, input.hottestSlot), ...slotNumbers(g, r)];
+  return [...shapes, ...slotNumbers(g, r)];
 }
 
 function hotSpot(g: CoreGeometry, r: Radii, slot: number | undefined): Shape[] {
@@ -161,7 +164,7 @@ function cable(r: Radii, turns: number): Shape[] {
 }
 
 /** The reading stands in the bore; where the bore is too small for it, below the core. */
-function middle(g: CoreGeometry, r: Radii, { reading }: RingDrawingInput): Shape[] {
+function middle(r: Radii, { reading }: RingDrawingInput): Shape[] {
   if (!reading) return [];
   const fits = r.inner >= 44;
   const at = fits ? { x: CENTRE.x, y: CENTRE.y - 4 } : { x: SIZE.width - 6, y: 22 };
@@ -175,22 +178,31 @@ function middle(g: CoreGeometry, r: Radii, { reading }: RingDrawingInput): Shape
   return lines;
 }
 
-function cableLine({ cableWords }: RingDrawingInput): Shape[] {
-  return cableWords === undefined ? [] : [{ kind: 'text', x: 4, y: SIZE.height - 4, text: cableWords, size: 11, weight: 600, anchor: 'start', ink: 'copper' }];
+function cableLine({ cableWords, turns }: RingDrawingInput): Shape[] {
+  const words = cableWords ?? (turns > MOST_CABLES ? `${Math.round(turns)} turns` : undefined);
+  return words === undefined ? [] : [{ kind: 'text', x: 4, y: SIZE.height - 4, text: words, size: 11, weight: 600, anchor: 'start', ink: 'copper' }];
 }
 
-function heatTable(heat: ReadonlyMap<number, number>): NonNullable<Drawing['table']> {
-  return { columns: ['slot', 'K over mean'], rows: [...heat.entries()].sort(([a], [b]) => a - b).map(([slot, k]) => [String(slot), k.toFixed(1)]) };
+function heatTable(heat: ReadonlyMap<number, number>, units: UnitSystem): NonNullable<Drawing['table']> {
+  const rows = [...heat.entries()].sort(([a], [b]) => a - b);
+  return { columns: ['slot', `${unitOf('temperature-difference', units)} over mean`], rows: rows.map(([slot, k]) => [String(slot), toShown(k, 'temperature-difference', units).toFixed(1)]) };
 }
 
 function describe(g: CoreGeometry, input: RingDrawingInput): string {
-  const millimetres = (m: number) => `${Math.round(m * 1000)} mm`;
+  const units = input.units ?? 'si';
+  const length = (m: number) => formatQuantity(m, 'length', units, { digits: units === 'si' ? 0 : 2 });
   const parts = [
-    g.kind === 'stator' ? `Stator, outside ${millimetres(g.outerDiameterM)}, bore ${millimetres(g.innerDiameterM)}` : `Armature, outside ${millimetres(g.outerDiameterM)}, inside ${millimetres(g.innerDiameterM)}`,
-    `${g.slots} slots ${millimetres(g.slotDepthM)} deep`,
-    ...(input.turns >= 1 ? [`${Math.round(input.turns)} turns of the loop cable`] : []),
+    g.kind === 'stator' ? `Stator, outside ${length(g.outerDiameterM)}, bore ${length(g.innerDiameterM)}` : `Armature, outside ${length(g.outerDiameterM)}, inside ${length(g.innerDiameterM)}`,
+    `${g.slots} slots ${length(g.slotDepthM)} deep`,
+    ...(input.turns >= 1 ? [turnsInWords(input.turns)] : []),
     ...(input.reading ? [`${input.reading.figure} ${input.reading.unit}`] : []),
     ...(input.hottestSlot === undefined ? [] : [`hottest at slot ${input.hottestSlot}`]),
   ];
   return `${parts.join(', ')}.`;
+}
+
+function turnsInWords(turns: number): string {
+  const count = Math.round(turns);
+  if (count === 1) return 'one turn of the loop cable';
+  return count > MOST_CABLES ? `${count} turns of the loop cable (${MOST_CABLES} drawn)` : `${count} turns of the loop cable`;
 }

@@ -4,7 +4,8 @@ import { digits } from './pen.js';
 export interface SpineSheet {
   readonly id: string;
   readonly label: string;
-  readonly state: 'done' | 'open' | 'to-come';
+  /** skipped: the route goes past this step, by a waiver or a changed route */
+  readonly state: 'done' | 'open' | 'to-come' | 'skipped';
   /** the gate in front of this sheet */
   readonly gate: 'open' | 'shut' | 'none';
 }
@@ -15,7 +16,7 @@ export interface SpineDrawingInput {
   readonly title?: string;
 }
 
-const FULL = { width: 232, sheet: 20, openSheet: 32, gap: 7, left: 8, sheetWidth: 56, openWidth: 72 } as const;
+const FULL = { width: 260, sheet: 20, openSheet: 32, gap: 7, left: 8, sheetWidth: 56, openWidth: 72 } as const;
 const MINI = { sheet: 6, openSheet: 7, gap: 2, height: 18 } as const;
 
 /** Where each sheet of a full spine lies, so that a screen can lay its links over them. */
@@ -36,10 +37,11 @@ export function spinePlaces(sheets: readonly SpineSheet[]): SheetPlace[] {
 }
 
 /**
- * A job's route as a stack of laminations: done sheets dark, the open one copper and drawn out, sheets to come in outline;
+ * A job's route as a stack of laminations: done sheets dark, the open one copper and drawn out, sheets to come in outline,
+ * skipped ones a dashed line;
  * a gate is the gap before its sheet, with a notch that is open or shut.
  *
- * @returns the full spine (232 units wide, labels beside the sheets) or the mini one for a table row (18 units high, no words).
+ * @returns the full spine (260 units wide, labels beside the sheets) or the mini one for a table row (18 units high, no words).
  * @throws never.
  *
  * Source: own drawing.
@@ -48,7 +50,9 @@ export function spineDrawing(input: SpineDrawingInput): Drawing {
   const title = input.title ?? 'Route of the job';
   const open = input.sheets.find((s) => s.state === 'open');
   const done = input.sheets.filter((s) => s.state === 'done').length;
-  const description = open ? `${done} of ${input.sheets.length} steps done; at ${open.label}.` : `${done} of ${input.sheets.length} steps done.`;
+  const skipped = input.sheets.filter((s) => s.state === 'skipped').length;
+  const steps = input.sheets.length - skipped;
+  const description = `${done} of ${steps} steps done${open ? `; at ${open.label}` : ''}${skipped > 0 ? `; ${skipped} skipped` : ''}.`;
   return input.variant === 'mini' ? { ...mini(input.sheets), title, description } : { ...full(input.sheets), title, description };
 }
 
@@ -58,7 +62,8 @@ function full(sheets: readonly SpineSheet[]): Pick<Drawing, 'width' | 'height' |
   sheets.forEach((sheet, i) => {
     const { y, height } = places[i]!;
     const open = sheet.state === 'open';
-    shapes.push({
+    if (sheet.state === 'skipped') shapes.push(skippedSheet(FULL.left, y + height / 2, FULL.sheetWidth, sheet.id));
+    else shapes.push({
       kind: 'rect',
       x: open ? 0 : FULL.left,
       y,
@@ -68,12 +73,21 @@ function full(sheets: readonly SpineSheet[]): Pick<Drawing, 'width' | 'height' |
       ...(sheet.state === 'to-come' ? { stroke: 'line', strokeWidth: 1.2 } : { fill: open ? 'copper' : 'text' }),
       mark: sheet.id,
     });
-    shapes.push({ kind: 'text', x: 88, y: y + height / 2 + 4.6, text: sheet.label, size: open ? 14.5 : 13, weight: open ? 700 : 400, anchor: 'start', ink: sheet.state === 'to-come' ? 'muted' : 'text', mark: sheet.id });
+    shapes.push({ kind: 'text', x: 88, y: y + height / 2 + 4.6, text: sheet.label, size: open ? 14.5 : 13, weight: open ? 700 : 400, anchor: 'start', ink: sheet.state === 'to-come' || sheet.state === 'skipped' ? 'muted' : 'text', mark: sheet.id });
     shapes.push(...notch(sheet.gate, y));
   });
   const last = places.at(-1);
   return { width: FULL.width, height: last ? last.y + last.height : 0, shapes };
 }
+
+const skippedSheet = (x: number, y: number, width: number, mark?: string): Shape => ({
+  kind: 'path',
+  d: `M${digits(x)} ${digits(y)}L${digits(x + width)} ${digits(y)}`,
+  stroke: 'line',
+  strokeWidth: 1.6,
+  dash: [3, 4],
+  ...(mark === undefined ? {} : { mark }),
+});
 
 /** The gap before a gated sheet: a short bar when open, crossed by a bolt when shut. */
 function notch(gate: SpineSheet['gate'], y: number): Shape[] {
@@ -89,6 +103,11 @@ function mini(sheets: readonly SpineSheet[]): Pick<Drawing, 'width' | 'height' |
   const shapes = sheets.map((sheet): Shape => {
     const open = sheet.state === 'open';
     const width = open ? MINI.openSheet : MINI.sheet;
+    if (sheet.state === 'skipped') {
+      const line = skippedSheet(x, MINI.height / 2, width);
+      x += width + MINI.gap;
+      return line;
+    }
     const shape: Shape = {
       kind: 'rect',
       x: x + (sheet.state === 'to-come' ? 0.5 : 0),

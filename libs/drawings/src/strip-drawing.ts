@@ -45,8 +45,11 @@ export function stripDrawing(input: StripDrawingInput): Drawing {
   const height = TOP + rows * ROW + 46;
   const top = Math.max(...bars.map((b) => b.value + b.uncertainty), input.limit ? input.limit.value * 1.12 : 0) * 1.06;
   const scale = (value: number) => LEFT + (Math.max(0, value) / (top || 1)) * (RIGHT - LEFT);
-  const shapes: Shape[] = [...limitZone(input, scale, rows)];
+  // the line stands over the bars, so that a bar which passes the limit is seen to pass it
+  const shapes: Shape[] = [...beyondLimit(input, scale, rows)];
   bars.forEach((bar, i) => shapes.push(...barShapes(bar, TOP + i * ROW + ROW / 2, scale, bar === input.before, input.unit)));
+  shapes.push(...limitLine(input, scale, rows));
+  bars.forEach((bar, i) => shapes.push(whisker(bar, TOP + i * ROW + ROW / 2, scale)));
   shapes.push(...increaseWords(input, height));
   return {
     width: WIDTH,
@@ -73,23 +76,32 @@ function emptyStrip(title: string): Drawing {
 
 function barShapes(bar: StripBar, y: number, scale: (v: number) => number, isBefore: boolean, unit: string): Shape[] {
   const [x0, x1] = [scale(0), scale(bar.value)];
-  const [low, high] = [scale(bar.value - bar.uncertainty), scale(bar.value + bar.uncertainty)];
-  const whisker = `M${digits(low)} ${digits(y)}L${digits(high)} ${digits(y)}M${digits(low)} ${digits(y - 9)}L${digits(low)} ${digits(y + 9)}M${digits(high)} ${digits(y - 9)}L${digits(high)} ${digits(y + 9)}`;
   return [
     { kind: 'text', x: 0, y: y + 4.5, text: bar.label, size: 12.5, weight: 400, anchor: 'start', ink: 'text' },
     { kind: 'rect', x: x0, y: y - 8, width: Math.max(0, x1 - x0), height: 16, fill: isBefore ? 'line' : 'steel' },
-    { kind: 'path', d: whisker, stroke: 'text', strokeWidth: 1.8 },
     { kind: 'text', x: WIDTH - 150, y: y + 5, text: bar.words, size: 14, weight: 600, anchor: 'start', ink: 'text' },
     { kind: 'text', x: WIDTH, y: y + 5, text: unit, size: 12, weight: 400, anchor: 'end', ink: 'muted' },
   ];
 }
 
-function limitZone({ limit }: StripDrawingInput, scale: (v: number) => number, rows: number): Shape[] {
+/** The bar's own uncertainty, from low to high with a mark at each end. */
+function whisker(bar: StripBar, y: number, scale: (v: number) => number): Shape {
+  const [low, high] = [scale(bar.value - bar.uncertainty), scale(bar.value + bar.uncertainty)].map(digits);
+  const [over, under] = [digits(y - 10), digits(y + 10)];
+  return { kind: 'path', d: `M${low} ${digits(y)}L${high} ${digits(y)}M${low} ${over}L${low} ${under}M${high} ${over}L${high} ${under}`, stroke: 'text', strokeWidth: 1.8 };
+}
+
+function beyondLimit({ limit }: StripDrawingInput, scale: (v: number) => number, rows: number): Shape[] {
+  if (!limit) return [];
+  const x = scale(limit.value);
+  return [{ kind: 'hatch', x, y: TOP - 4, width: Math.max(0, RIGHT + 6 - x), height: rows * ROW + 4, ink: 'fails' }];
+}
+
+function limitLine({ limit }: StripDrawingInput, scale: (v: number) => number, rows: number): Shape[] {
   if (!limit) return [];
   const x = scale(limit.value);
   const bottom = TOP + rows * ROW;
   return [
-    { kind: 'hatch', x, y: TOP - 4, width: Math.max(0, RIGHT + 6 - x), height: bottom - TOP + 4, ink: 'fails' },
     { kind: 'path', d: `M${digits(x)} ${digits(TOP - 8)}L${digits(x)} ${digits(bottom + 4)}`, stroke: 'fails', strokeWidth: 2.4 },
     { kind: 'text', x: Math.min(x, RIGHT - 60), y: bottom + 17, text: limit.words, size: 11.5, weight: 400, anchor: 'middle', ink: 'fails' },
   ];
