@@ -14,14 +14,14 @@ const STANDING = `SELECT s.*, s.grossMinor - s.paidMinor AS balanceMinor,
 const WITH_NAMES = `(SELECT i.*, j.number AS jobNumber, c.name AS customerName, q.number AS quoteNumber
   FROM (${STANDING}) i JOIN jobs j ON j.id = i.jobId JOIN customers c ON c.id = i.customerId JOIN quotes q ON q.id = i.quoteId) i`;
 
-/** An invoice in a list; today is the first parameter, a WHERE on `i` follows. */
+/** An invoice in a list; takes `:today`, a WHERE on `i` follows. */
 export const INVOICE_ROW_SELECT = `SELECT i.id, i.number, i.jobId, i.jobNumber, i.customerName, i.state, i.currency, i.grossMinor, i.balanceMinor, i.issuedAt, i.dueOn,
-    (i.balanceMinor > 0 AND i.dueOn < ?1) AS overdue FROM ${WITH_NAMES}`;
+    (i.balanceMinor > 0 AND i.dueOn < :today) AS overdue FROM ${WITH_NAMES}`;
 export const INVOICE_COUNT = `SELECT COUNT(*) AS total FROM ${WITH_NAMES}`;
 
-/** One statement an invoice, its lines and payments included; today is the first parameter, a WHERE on `i` follows. */
+/** One statement an invoice, its lines and payments included; takes `:today`, a WHERE on `i` follows. */
 export const INVOICE_SELECT = `SELECT i.id, i.number, i.jobId, i.jobNumber, i.customerId, i.customerName, i.quoteNumber, i.state, i.currency, i.netMinor, i.taxMinor, i.grossMinor,
-    i.paidMinor, i.balanceMinor, i.issuedAt, i.dueOn, (i.balanceMinor > 0 AND i.dueOn < ?1) AS overdue, i.paperId, i.version,
+    i.paidMinor, i.balanceMinor, i.issuedAt, i.dueOn, (i.balanceMinor > 0 AND i.dueOn < :today) AS overdue, i.paperId, i.version,
     (SELECT json_group_array(json_object('kind', l.kind, 'description', l.description, 'quantityThousandths', l.quantityThousandths, 'unit', l.unit,
        'unitPriceMinor', l.unitPriceMinor, 'taxRateBasisPoints', l.taxRateBasisPoints, 'netMinor', l.netMinor, 'taxMinor', l.taxMinor) ORDER BY l.position)
      FROM invoice_lines l WHERE l.invoiceId = i.id) AS lines,

@@ -31,16 +31,17 @@ export class InvoicesService {
 
   async list({ state, q, page, size }: InvoiceQuery): Promise<InvoicePage> {
     const like = q ? `%${q.replace(/[\\%_]/g, '\\$&')}%` : null;
-    const where = `WHERE (?2 = 'all' OR (?2 = 'overdue' AND i.balanceMinor > 0 AND i.dueOn < ?1) OR i.state = ?2)
-      AND (?3 IS NULL OR i.number LIKE ?3 ESCAPE '\\' OR i.jobNumber LIKE ?3 ESCAPE '\\' OR i.customerName LIKE ?3 ESCAPE '\\')`;
-    const rows = await this.db.all<InvoiceListRow & { overdue: number & boolean }>(`${INVOICE_ROW_SELECT} ${where} ORDER BY i.id DESC LIMIT ?4 OFFSET ?5`, [this.today(), state, like, size, (page - 1) * size]);
-    const count = await this.db.one<{ total: number }>(`${INVOICE_COUNT} ${where}`, [this.today(), state, like]);
+    const where = `WHERE (:state = 'all' OR (:state = 'overdue' AND i.balanceMinor > 0 AND i.dueOn < :today) OR i.state = :state)
+      AND (:like IS NULL OR i.number LIKE :like ESCAPE '\\' OR i.jobNumber LIKE :like ESCAPE '\\' OR i.customerName LIKE :like ESCAPE '\\')`;
+    const filter = { today: this.today(), state, like };
+    const rows = await this.db.all<InvoiceListRow & { overdue: number & boolean }>(`${INVOICE_ROW_SELECT} ${where} ORDER BY i.id DESC LIMIT :size OFFSET :from`, [{ ...filter, size, from: (page - 1) * size }]);
+    const count = await this.db.one<{ total: number }>(`${INVOICE_COUNT} ${where}`, [filter]);
     return { rows: rows.map(toInvoiceListRow), total: count?.total ?? 0, page, size };
   }
 
   async ofJob(jobId: string): Promise<InvoiceView[]> {
     if (!(await this.db.one('SELECT id FROM jobs WHERE id = ?', [jobId]))) throw notFound('job');
-    const rows = await this.db.all<InvoiceRow>(`${INVOICE_SELECT} WHERE i.jobId = ?2 ORDER BY i.id DESC`, [this.today(), jobId]);
+    const rows = await this.db.all<InvoiceRow>(`${INVOICE_SELECT} WHERE i.jobId = :jobId ORDER BY i.id DESC`, [{ today: this.today(), jobId }]);
     return rows.map(toInvoiceView);
   }
 
@@ -50,13 +51,13 @@ export class InvoicesService {
 
   /** The invoice as it stands for this reader: the committed one outside a unit, the unit's own inside. */
   async viewIn(source: QuerySource, invoiceId: string): Promise<InvoiceView> {
-    const [row] = await source.query<InvoiceRow[]>(`${INVOICE_SELECT} WHERE i.id = ?2`, [this.today(), invoiceId]);
+    const [row] = await source.query<InvoiceRow[]>(`${INVOICE_SELECT} WHERE i.id = :invoiceId`, [{ today: this.today(), invoiceId }]);
     if (!row) throw notFound('invoice');
     return toInvoiceView(row);
   }
 
   async ofCustomer(actor: Actor, invoiceId: string): Promise<InvoiceView> {
-    const row = await this.db.one<InvoiceRow>(`${INVOICE_SELECT} WHERE i.id = ?2 AND i.customerId = ?3`, [this.today(), invoiceId, actor.customerId]);
+    const row = await this.db.one<InvoiceRow>(`${INVOICE_SELECT} WHERE i.id = :invoiceId AND i.customerId = :customerId`, [{ today: this.today(), invoiceId, customerId: actor.customerId }]);
     if (!row) throw notFound('invoice');
     return toInvoiceView(row);
   }

@@ -14,8 +14,8 @@ export class MessagesService {
     return this.db.all<OutboxList[number]>(
       `SELECT id, kind, "to", subject, attempts, createdAt, sentAt, lastError,
               CASE WHEN sentAt IS NOT NULL THEN 'sent' WHEN givenUpAt IS NOT NULL THEN 'given-up' ELSE 'waiting' END AS state
-       FROM outbox WHERE (?1 IS NULL OR jobId = ?1) ORDER BY id DESC LIMIT 200`,
-      [jobId],
+       FROM outbox WHERE (:jobId IS NULL OR jobId = :jobId) ORDER BY id DESC LIMIT 200`,
+      [{ jobId }],
     );
   }
 }

@@ -1,0 +1,46 @@
+import { Button, Dialog, DialogBody, DialogFooter } from '@blueprintjs/core';
+import type { ReactNode } from 'react';
+import { defineText } from '../lib/text.js';
+import { ErrorNotice } from './notices.js';
+
+const t = defineText({ cancel: 'Not now' });
+
+interface ConfirmDialogProps {
+  readonly open: boolean;
+  readonly title: string;
+  readonly confirm: string;
+  readonly pending?: boolean;
+  readonly error?: unknown;
+  readonly onConfirm: () => void;
+  readonly onClose: () => void;
+  readonly children?: ReactNode;
+}
+
+/** Asked before something that cannot be taken back, or that needs a word with it. */
+export function ConfirmDialog({ open, title, confirm, pending, error, onConfirm, onClose, children }: ConfirmDialogProps) {
+  return (
+    <Dialog isOpen={open} onClose={onClose} title={title}>
+      <form
+        onSubmit={(e) => {
+          e.preventDefault();
+          onConfirm();
+        }}
+      >
+        <DialogBody>
+          <div className="stack">
+            {children}
+            <ErrorNotice error={error} />
+          </div>
+        </DialogBody>
+        <DialogFooter
+          actions={
+            <>
+              <Button text={t('cancel')} onClick={onClose} />
+              <Button type="submit" intent="primary" text={confirm} loading={pending} />
+            </>
+          }
+        />
+      </form>
+    </Dialog>
+  );
+}

@@ -1,0 +1,57 @@
+import { Button, Callout, Spinner } from '@blueprintjs/core';
+import type { UseQueryResult } from '@tanstack/react-query';
+import type { ReactNode } from 'react';
+import { ApiError } from '../lib/http.js';
+import { defineText } from '../lib/text.js';
+import './faces.css';
+
+const t = defineText({
+  waiting: 'Loading…',
+  failed: 'This could not be loaded',
+  again: 'Try again',
+  number: 'Request number {id}',
+});
+
+export function Waiting({ words = t('waiting') }: { readonly words?: string }) {
+  return (
+    <div className="lb-face" role="status">
+      <Spinner size={28} aria-label={words} />
+    </div>
+  );
+}
+
+export function Failed({ error, onAgain }: { readonly error: unknown; readonly onAgain?: () => void }) {
+  const api = error instanceof ApiError ? error : null;
+  return (
+    <Callout className="lb-face-failed" intent="danger" title={t('failed')} role="alert">
+      <p>{error instanceof Error ? error.message : String(error)}</p>
+      {api?.requestId && <p className="muted">{t('number', { id: api.requestId })}</p>}
+      {onAgain && <Button text={t('again')} onClick={onAgain} />}
+    </Callout>
+  );
+}
+
+/** Nothing there yet, and what to do about it. */
+export function Empty({ title, children }: { readonly title: string; readonly children?: ReactNode }) {
+  return (
+    <div className="lb-face lb-face-empty">
+      <h3>{title}</h3>
+      {children && <div className="muted">{children}</div>}
+    </div>
+  );
+}
+
+interface AnswerProps<T> {
+  readonly query: UseQueryResult<T>;
+  readonly children: (data: T) => ReactNode;
+  readonly isEmpty?: (data: T) => boolean;
+  readonly empty?: ReactNode;
+}
+
+/** The four faces of a question to the server: waiting, failed, empty, filled. */
+export function Answer<T>({ query, children, isEmpty, empty }: AnswerProps<T>) {
+  if (query.data === undefined && query.error) return <Failed error={query.error} onAgain={() => void query.refetch()} />;
+  if (query.data === undefined) return <Waiting />;
+  if (isEmpty?.(query.data) && empty !== undefined) return empty;
+  return children(query.data);
+}
