@@ -59,7 +59,7 @@ export function evaluateFinalTest(
   const derived = deriveFinal(readings, limits);
   const { judgements, notDone } = judgeParts(readings, derived, limits);
   const warnings = insulationWarnings(readings.insulation);
-  if (readings.noLoad && derived.noLoad) warnings.push(...noLoadWarnings(readings.noLoad, derived.noLoad, readings.insulation.ratedVoltageV));
+  if (readings.noLoad && derived.noLoad) warnings.push(...noLoadWarnings(readings.noLoad, derived.noLoad));
   return conclude(judgements, { notDone, demanded }, warnings, derived);
 }
 
@@ -80,7 +80,7 @@ function judgeParts(r: FinalTestReadings, d: FinalTestDerived, limits: MachineTe
   part('winding-resistance', r.windingResistance && d.windingResistance && judgeWindingResistance(r.windingResistance, d.windingResistance, limits));
   part('high-potential', r.highPotential && d.highPotential && judgeHighPotential(r.highPotential, d.highPotential, limits));
   if (typeof r.surgeDifferenceFraction === 'number') judgements.push(judgeSurge(r.surgeDifferenceFraction, { appliedV: null, leastV: null }, limits));
-  part('no-load', d.noLoad && judgeNoLoad(d.noLoad, r.insulation.ratedVoltageV, limits));
+  part('no-load', d.noLoad && judgeNoLoad(d.noLoad, limits));
   part('vibration', r.vibration && d.vibration && judgeVibration(r.vibration, d.vibration, limits));
   part('direction', r.directionRight === null ? null : judgeDirection(r.directionRight));
   part('bearings', r.bearings && d.bearings && judgeBearings(r.bearings, d.bearings, limits));

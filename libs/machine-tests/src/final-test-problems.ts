@@ -41,6 +41,7 @@ function noLoadProblems(r: NoLoadReading | null): MachineTestProblem[] {
   if (r.points.length === 0) say('points', 'no-points', 'Read volts, amperes and watts at rated volts.');
   if (!finite(r.frequencyHz) || r.frequencyHz < 1 || r.frequencyHz > 1000) say('frequencyHz', 'frequency', 'Enter the frequency of the supply: between 1 and 1000 Hz.');
   if (r.speedRpm !== null && !positive(r.speedRpm)) say('speedRpm', 'not-positive', 'Enter the speed, or leave it empty.');
+  if (r.ratedVoltageV !== undefined && !positive(r.ratedVoltageV)) say('ratedVoltageV', 'not-positive', 'Enter the rated volts of the winding that is fed, or leave it empty.');
   if (!positive(r.lineResistanceOhm)) say('lineResistanceOhm', 'not-positive', 'Measure the resistance between two leads: more than 0.');
   else r.points.forEach((point, i) => problems.push(...asProblem(`noLoad.points.${i}`, 'no-load-point', () => noLoadLosses(point, r.lineResistanceOhm))));
   return problems;

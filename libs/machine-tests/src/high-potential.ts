@@ -76,7 +76,7 @@ export function highPotentialLevel(request: HighPotentialRequest, limits: Machin
     'part-rewound': limits.highPotentialPartRewound,
   }[request.case];
   const dc = request.supply === 'dc' ? limits.highPotentialDcFactor : null;
-  const words = [full.words, share && `× ${percentWords(share.value)}`, dc && `× ${dc.value} for DC`].filter(Boolean).join(' ');
+  const words = [share || dc ? `(${full.words})` : full.words, share && `× ${percentWords(share.value)}`, dc && `× ${dc.value} for DC`].filter(Boolean).join(' ');
   const { source, standing } = share ?? row;
   // 2150 × 0.65 is 1397.5 on paper; binary tails stay out of it
   const voltsV = Math.round(full.voltsV * (share?.value ?? 1) * (dc?.value ?? 1) * 1e6) / 1e6;

@@ -27,19 +27,22 @@ export function judgeHighPotential(r: HighPotentialReading, level: HighPotential
 }
 
 export interface NoLoadDerived {
+  /** The volts the run is judged at. */
+  ratedVoltageV: number;
   /** At the point that stands for the rated volts; null when there is none. */
   atRated: (NoLoadLosses & { voltsUnbalanceFraction: number; ampsUnbalanceFraction: number }) | null;
   /** Null when there are too few low points, or when they do not belong together. */
   separation: NoLoadSeparation | null;
 }
 
-export function deriveNoLoad(r: NoLoadReading, ratedVoltageV: number): NoLoadDerived {
+export function deriveNoLoad(r: NoLoadReading, insulationRatedV: number): NoLoadDerived {
+  const ratedVoltageV = r.ratedVoltageV ?? insulationRatedV;
   const settings = r.points.map((point) => ({
     ...noLoadLosses(point, r.lineResistanceOhm),
     voltsUnbalanceFraction: unbalanceFraction(point.voltsV),
     ampsUnbalanceFraction: unbalanceFraction(point.ampsA),
   }));
-  return { atRated: nearestToRated(settings, ratedVoltageV) ?? null, separation: separationOrNull(r, ratedVoltageV) };
+  return { ratedVoltageV, atRated: nearestToRated(settings, ratedVoltageV) ?? null, separation: separationOrNull(r, ratedVoltageV) };
 }
 
 /** A negative loss is no loss: points that give one do not belong to one line. */
@@ -53,15 +56,15 @@ function separationOrNull(r: NoLoadReading, ratedVoltageV: number): NoLoadSepara
   }
 }
 
-export function noLoadWarnings(r: NoLoadReading, d: NoLoadDerived, ratedVoltageV: number): MachineTestProblem[] {
-  const low = r.points.filter((p) => p.voltsV.reduce((sum, v) => sum + v, 0) / 3 <= LOW_VOLTS_SHARE * ratedVoltageV).length;
+export function noLoadWarnings(r: NoLoadReading, d: NoLoadDerived): MachineTestProblem[] {
+  const low = r.points.filter((p) => p.voltsV.reduce((sum, v) => sum + v, 0) / 3 <= LOW_VOLTS_SHARE * d.ratedVoltageV).length;
   if (low < 3 || d.separation) return [];
   return [{ path: 'noLoad.points', code: 'separation', message: 'The low points give no sensible friction and core loss: they need three different volts and one line. Check the watts.' }];
 }
 
-export function judgeNoLoad(d: NoLoadDerived, ratedVoltageV: number, limits: MachineTestLimits): TestJudgement {
+export function judgeNoLoad(d: NoLoadDerived, limits: MachineTestLimits): TestJudgement {
   const row = limits.noLoadCurrentBalance;
-  if (!d.atRated) return judgement('no-load-current-balance', row, null, 'not-valid', `No point stands within 2 % of ${figureWords(ratedVoltageV)} V. Read one there.`);
+  if (!d.atRated) return judgement('no-load-current-balance', row, null, 'not-valid', `No point stands within 2 % of ${figureWords(d.ratedVoltageV)} V. Read one there.`);
   const { voltsUnbalanceFraction: volts, ampsUnbalanceFraction: amps } = d.atRated;
   const found = `The amperes differ from their mean by up to ${percentWords(amps)}, ${percentWords(row.value)} allowed.`;
   if (volts > limits.noLoadVoltsBalance.value) {

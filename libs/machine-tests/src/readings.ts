@@ -66,6 +66,8 @@ export interface NoLoadReading {
   lineResistanceOhm: number;
   frequencyHz: number;
   speedRpm: number | null;
+  /** Of the winding that is fed; left out, it is the volts of the insulation reading. A wound rotor needs it. */
+  ratedVoltageV?: number | undefined;
 }
 
 export interface VibrationReading {
