@@ -57,7 +57,7 @@ export function Spine({ sheets, hrefOf, current, label }: SpineProps) {
   );
 }
 
-const STATE_WORDS = { done: 'done', open: 'open now', 'to-come': 'to come' } as const;
+const STATE_WORDS = { done: 'done', open: 'open now', 'to-come': 'to come', skipped: 'left out' } as const;
 
 /** The same spine, small, for a row of a table. */
 export function MiniSpine({ job }: { readonly job: SpineJob }) {
