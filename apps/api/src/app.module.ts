@@ -1,6 +1,7 @@
 import { Module, type DynamicModule } from '@nestjs/common';
 import { APP_FILTER, APP_INTERCEPTOR, APP_PIPE } from '@nestjs/core';
 import { AcceptanceModule } from './acceptance/acceptance.module.js';
+import { AttachmentsModule } from './attachments/attachments.module.js';
 import { AuthModule } from './auth/auth.module.js';
 import { CertificatesModule } from './certificates/certificates.module.js';
 import { ClockModule } from './clock/clock.module.js';
@@ -22,6 +23,7 @@ import { PapersModule } from './papers/papers.module.js';
 import { PaymentsModule } from './payments/payments.module.js';
 import { QuotesModule } from './quotes/quotes.module.js';
 import { RecordsModule } from './records/records.module.js';
+import { SearchModule } from './search/search.module.js';
 import { ShopModule } from './shop/shop.module.js';
 import { SignOffsModule } from './sign-offs/sign-offs.module.js';
 import { UsersModule } from './users/users.module.js';
@@ -31,7 +33,7 @@ export class AppModule {
   static register(config: Config): DynamicModule {
     return {
       module: AppModule,
-      imports: [ConfigModule.register(config), ClockModule, DatabaseModule, HistoryModule, ShopModule, PapersModule, OutboxModule, AuthModule, UsersModule, AcceptanceModule, InstrumentsModule, RecordsModule, SignOffsModule, CertificatesModule, CustomersModule, MachinesModule, JobsModule, QuotesModule, InvoicesModule, PaymentsModule],
+      imports: [ConfigModule.register(config), ClockModule, DatabaseModule, HistoryModule, ShopModule, PapersModule, OutboxModule, AuthModule, UsersModule, AcceptanceModule, InstrumentsModule, RecordsModule, SignOffsModule, CertificatesModule, CustomersModule, MachinesModule, JobsModule, AttachmentsModule, SearchModule, QuotesModule, InvoicesModule, PaymentsModule],
       controllers: [HealthController],
       providers: [
         { provide: APP_PIPE, useFactory: schemaPipe },

@@ -1,5 +1,4 @@
 import { stat } from 'node:fs/promises';
-import { Mutex } from 'async-mutex';
 import sharp from 'sharp';
 import { AppError } from '../http/app-error.js';
 import type { FileKind } from './file-kinds.js';
@@ -13,7 +12,13 @@ const NO_PICTURE = 'This is no picture we can read. Take it again, or send it as
 // one picture at a time, and nothing kept: the memory of the shop's small machine is for its data
 sharp.cache(false);
 sharp.concurrency(1);
-const one = new Mutex();
+let last: Promise<unknown> = Promise.resolve();
+
+function oneAtATime<T>(work: () => Promise<T>): Promise<T> {
+  const result = last.then(work);
+  last = result.catch(() => undefined);
+  return result;
+}
 
 const open = (path: string) => sharp(path, { failOn: 'error', limitInputPixels: MOST_PIXELS, sequentialRead: true });
 
@@ -22,9 +27,9 @@ const open = (path: string) => sharp(path, { failOn: 'error', limitInputPixels: 
  * whatever else hung on the file.
  */
 export function redraw(kind: FileKind, from: string, to: string): Promise<void> {
-  return one.runExclusive(async () => {
+  return oneAtATime(async () => {
     try {
-      const { width, height } = await open(from).metadata();
+      const { width, height } = await sharp(from, { limitInputPixels: false }).metadata();
       if (width * height > MOST_PIXELS) throw new AppError('FILE_NOT_ACCEPTED', 'This picture has more than 64 million pixels. Take it with a smaller resolution.');
       const picture = open(from).autoOrient().resize({ width: LONGEST_SIDE_PX, height: LONGEST_SIDE_PX, fit: 'inside', withoutEnlargement: true });
       await (kind === 'image/png' ? picture.png() : kind === 'image/webp' ? picture.webp({ quality: 88 }) : picture.jpeg({ quality: 88 })).toFile(to);
@@ -36,7 +41,7 @@ export function redraw(kind: FileKind, from: string, to: string): Promise<void> 
 }
 
 export const thumb = (from: string, to: string): Promise<void> =>
-  one.runExclusive(async () => {
+  oneAtATime(async () => {
     await stat(from);
     await open(from).resize({ width: THUMB_SIDE_PX, height: THUMB_SIDE_PX, fit: 'inside', withoutEnlargement: true }).webp({ quality: 78 }).toFile(to);
   });

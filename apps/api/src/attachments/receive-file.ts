@@ -1,0 +1,44 @@
+import { createWriteStream } from 'node:fs';
+import { rm } from 'node:fs/promises';
+import { pipeline } from 'node:stream/promises';
+import type { FastifyRequest } from 'fastify';
+import { AppError } from '../http/app-error.js';
+import { UPLOAD_LIMIT_BYTES } from '../http/setup.js';
+
+/** What the form puts round the file: boundaries, names, a few fields. */
+const ROUND_THE_FILE_BYTES = 64 * 1024;
+const tooLarge = () => new AppError('FILE_TOO_LARGE', `A file may have ${Math.floor(UPLOAD_LIMIT_BYTES / 1024 / 1024)} MB at most. Take the picture smaller, or scan with fewer dots.`);
+
+/** Refused by what it says of itself, before a byte of it is read. */
+export function assertSendable(request: FastifyRequest): void {
+  if (!request.isMultipart()) throw new AppError('NOT_MULTIPART', 'Send the file as form data.');
+  if (Number(request.headers['content-length'] ?? 0) > UPLOAD_LIMIT_BYTES + ROUND_THE_FILE_BYTES) throw tooLarge();
+}
+
+/** Takes the one file of a form straight to disk, and stops at the limit; the name is what its sender called it. */
+export async function receiveFile(request: FastifyRequest, to: string): Promise<{ name: string }> {
+  assertSendable(request);
+  try {
+    const part = await request.file({ throwFileSizeLimit: false, limits: { fileSize: UPLOAD_LIMIT_BYTES, files: 1 } });
+    if (!part) throw new AppError('FILE_NOT_ACCEPTED', 'No file came along. Choose one and send it again.');
+    const limit = new AbortController();
+    part.file.on('limit', () => limit.abort());
+    await pipeline(part.file, createWriteStream(to, { flags: 'wx', mode: 0o600 }), { signal: limit.signal }).catch((error: unknown) => {
+      throw limit.signal.aborted ? tooLarge() : error;
+    });
+    if (part.file.truncated) throw tooLarge();
+    return { name: part.filename ?? '' };
+  } catch (error) {
+    // the rest is let past, so that the sender comes to read the answer
+    request.raw.unpipe();
+    request.raw.resume();
+    await rm(to, { force: true });
+    throw refusalOf(error);
+  }
+}
+
+/** A fault of our disk stays one; anything else means that the form was broken or broken off. */
+function refusalOf(error: unknown): unknown {
+  if (error instanceof AppError || typeof (error as NodeJS.ErrnoException).errno === 'number') return error;
+  return new AppError('INPUT_NOT_VALID', 'The file did not arrive whole. Send it again.', { cause: error });
+}
