@@ -8,7 +8,7 @@ const eventSchema = z.object({
   id: z.string().regex(/^evt_\w{1,250}$/),
   object: z.literal('event'),
   type: z.string().min(1).max(200),
-  data: z.object({ object: z.object({ id: z.string().max(255).optional(), object: z.string().max(100), payment_intent: z.unknown() }) }),
+  data: z.object({ object: z.object({ id: z.string().max(255).optional(), object: z.string().max(100), payment_intent: z.unknown().optional() }) }),
 });
 
 /**
