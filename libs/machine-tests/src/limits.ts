@@ -14,7 +14,7 @@ const standard = (value: number, unit: string, source: string): MachineTestLimit
 const practice = (value: number, unit: string, source: string): MachineTestLimit => ({ value, unit, source: `Common practice: ${source}`, standing: 'P' });
 
 const IEEE43 = 'IEEE 43-2013, one minute, at 40 °C (figure from memory)';
-const HIGH_POTENTIAL = 'ANSI/EASA AR100, NEMA MG 1, IEC 60034-1';
+const HIGH_POTENTIAL = 'ANSI/EASA AR100, NEMA MG 1, IEC 60034-1 (AC figures from memory)';
 const VIBRATION = 'IEC 60034-14:2003, grade A';
 const NEMA_VIBRATION = 'NEMA MG 1 Part 7, as in ANSI/EASA AR100-2015 4.5.6';
 
@@ -41,7 +41,7 @@ export const DEFAULT_MACHINE_TEST_LIMITS = {
   highPotentialSmallV: standard(1000, 'V', `${HIGH_POTENTIAL}: up to 0.5 hp and 250 V`),
   highPotentialLowVoltageV: standard(500, 'V', 'ANSI/EASA AR100: windings rated 35 V or less'),
   highPotentialDcFactor: standard(1.7, '1', 'ANSI/EASA AR100: DC is 1.7 times AC'),
-  highPotentialRepeat: standard(0.8, '1', `${HIGH_POTENTIAL}: a second full test at 80 % (from memory)`),
+  highPotentialRepeat: standard(0.8, '1', `${HIGH_POTENTIAL}: a second full test at 80 %`),
   highPotentialReconditioned: standard(0.65, '1', 'ANSI/EASA AR100 4.4: reconditioned at 65 % (from memory)'),
   highPotentialPartRewound: standard(0.75, '1', 'IEC 60034-1 9.2: partly rewound at 75 % (from memory)'),
   highPotentialSeconds: standard(60, 's', HIGH_POTENTIAL),
