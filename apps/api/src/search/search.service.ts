@@ -4,7 +4,7 @@ import type { Actor } from '../auth/actor.js';
 import { ReadDb } from '../database/read-db.js';
 import { jobOfAddress, searchStatement, type SearchRow } from './search-query.js';
 
-const PLACE: Record<SearchHit['kind'], string> = { job: '/jobs', customer: '/customers', machine: '/machines', invoice: '/invoices' };
+const PLACE: Record<SearchHit['kind'], string> = { job: '/jobs', customer: '/counter/customers', machine: '/counter/machines', invoice: '/accounts/invoices' };
 
 /** One box for everything: job number, scanned tag, serial, customer, machine, and invoice number for who may read those. */
 @Injectable()
