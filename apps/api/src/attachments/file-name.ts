@@ -2,7 +2,6 @@ import { FILE_KINDS, type FileKind } from './file-kinds.js';
 
 const LONGEST = 120;
 /** Characters that break a header or a path, cannot be seen, or turn the reading direction. */
-// eslint-disable-next-line no-control-regex
 const UNSAFE = /[\u0000-\u001f\u007f-\u009f\u200b-\u200f\u2028-\u202e\u2060-\u2069\ufeff"*/:<>?\\|]/g;
 
 /** Half a character, which no header can carry. */

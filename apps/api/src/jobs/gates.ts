@@ -1,5 +1,5 @@
 import type { GateCondition } from '@shared/errors';
-import { GATE_BEFORE, GATES, ROUTE_STEPS, type Gate, type Route, type Step } from '@shared/route';
+import { GATE_BEFORE, GATES, type Gate, type Route, type Step } from '@shared/route';
 import { condition } from './condition.js';
 import { coreAfterConditions, coreBeforeConditions, coreTestMade } from './core-conditions.js';
 import { lastOf, recordsOf, signedFor, type JobFacts } from './job-facts.js';
