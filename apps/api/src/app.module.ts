@@ -21,6 +21,7 @@ import { MachinesModule } from './machines/machines.module.js';
 import { OutboxModule } from './outbox/outbox.module.js';
 import { PapersModule } from './papers/papers.module.js';
 import { PaymentsModule } from './payments/payments.module.js';
+import { PortalModule } from './portal/portal.module.js';
 import { QuotesModule } from './quotes/quotes.module.js';
 import { RecordsModule } from './records/records.module.js';
 import { SearchModule } from './search/search.module.js';
@@ -33,7 +34,7 @@ export class AppModule {
   static register(config: Config): DynamicModule {
     return {
       module: AppModule,
-      imports: [ConfigModule.register(config), ClockModule, DatabaseModule, HistoryModule, ShopModule, PapersModule, OutboxModule, AuthModule, UsersModule, AcceptanceModule, InstrumentsModule, RecordsModule, SignOffsModule, CertificatesModule, CustomersModule, MachinesModule, JobsModule, AttachmentsModule, SearchModule, QuotesModule, InvoicesModule, PaymentsModule],
+      imports: [ConfigModule.register(config), ClockModule, DatabaseModule, HistoryModule, ShopModule, PapersModule, OutboxModule, AuthModule, UsersModule, AcceptanceModule, InstrumentsModule, RecordsModule, SignOffsModule, CertificatesModule, CustomersModule, MachinesModule, JobsModule, AttachmentsModule, SearchModule, QuotesModule, InvoicesModule, PaymentsModule, PortalModule],
       controllers: [HealthController],
       providers: [
         { provide: APP_PIPE, useFactory: schemaPipe },

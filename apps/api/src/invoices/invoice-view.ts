@@ -1,6 +1,5 @@
-import type { InvoiceView } from '@shared/invoices';
+import type { InvoiceView, invoiceRowSchema } from '@shared/invoices';
 import type { z } from 'zod';
-import type { invoiceRowSchema } from '@shared/invoices';
 import { taxSummaryOf } from '../quotes/quote-sums.js';
 import type { MoneyLineView } from '../quotes/quote-view.js';
 
