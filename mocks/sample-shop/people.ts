@@ -1,0 +1,34 @@
+import type { NestFastifyApplication } from '@nestjs/platform-fastify';
+
+/** Somebody of the sample shop, doing things through the same API as everybody. */
+export class SamplePerson {
+  private constructor(
+    private readonly app: NestFastifyApplication,
+    private readonly origin: string,
+    private readonly cookie: string,
+  ) {}
+
+  static async signIn(app: NestFastifyApplication, origin: string, email: string, password: string): Promise<SamplePerson> {
+    const answer = await app.inject({ method: 'POST', url: '/api/session', headers: { origin }, payload: { email, password } });
+    if (answer.statusCode !== 200) throw new Error(`${email} could not sign in: ${answer.payload}`);
+    return new SamplePerson(app, origin, String(answer.headers['set-cookie']).split(';')[0]!);
+  }
+
+  async get<T>(path: string): Promise<T> {
+    return this.ask<T>('GET', path);
+  }
+
+  async post<T>(path: string, payload: object = {}): Promise<T> {
+    return this.ask<T>('POST', path, payload);
+  }
+
+  async put<T>(path: string, payload: object): Promise<T> {
+    return this.ask<T>('PUT', path, payload);
+  }
+
+  private async ask<T>(method: 'GET' | 'POST' | 'PUT', path: string, payload?: object): Promise<T> {
+    const answer = await this.app.inject({ method, url: `/api${path}`, headers: { origin: this.origin, cookie: this.cookie }, ...(payload ? { payload } : {}) });
+    if (answer.statusCode >= 300) throw new Error(`${method} ${path} was refused (${answer.statusCode}): ${answer.payload}\n${JSON.stringify(payload)}`);
+    return (answer.payload === '' ? undefined : JSON.parse(answer.payload)) as T;
+  }
+}
