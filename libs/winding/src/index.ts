@@ -1,2 +1,10 @@
 export { windingProblems, type Conductor, type FlatWire, type RoundWire, type WindingConnection, type WindingData, type WindingProblem } from './winding-data.js';
 export { distributionFactor, pitchFactor, windingFactors, type WindingFactors } from './winding-factors.js';
+export { INDUCED_SHARE, dcFluxPerPole, fluxPerPole, phaseVolts, turnsPerPhase } from './turns-and-flux.js';
+export { USUAL_FLUX_DENSITIES_T, backIronFluxDensity, fluxFlag, gapFluxDensity, gapPeakFluxDensity, toothFluxDensity, type FluxFlag, type FluxPlace } from './flux-densities.js';
+export { CIRCULAR_MIL_M2, FURTHER_METRIC_SIZES_M, METRIC_SIZES_M, METRIC_WIRES, awgDiameter, awgGauge, awgName, conductorArea, type MetricWire } from './wire.js';
+export { substituteWires, type Substitute, type SubstituteRequest } from './wire-substitution.js';
+export { COPPER_KG_PER_M3, COPPER_OHM_M, calculatedResistance, copperMass, copperResistivity, currentDensity, lineCopperArea, type CalculatedResistance } from './copper.js';
+export { FLUX_CHANGE_TO_ASK, redesign, slotFill, type Redesign, type WindingSupply } from './redesign.js';
+export { windingDifferences, type WindingDifference, type WindingItem } from './winding-differences.js';
+export { checkWinding, windingCheckProblems, type WindingCheck, type WindingCheckInput, type WoundCore } from './check-winding.js';
