@@ -10,7 +10,7 @@ import { safeNext } from '../safe-next.js';
 export function SignInPage() {
   const navigate = useNavigate();
   const [params] = useSearchParams();
-  useTheme('system');
+  useTheme();
   return (
     <main className="lb-sign-in">
       <div className="stack">

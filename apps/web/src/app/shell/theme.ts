@@ -1,13 +1,27 @@
 import { useEffect } from 'react';
 import type { Preferences } from '@shared/session';
 
-/** Puts the theme on the page: the device's own, or the one that is forced. */
-export function useTheme(theme: Preferences['theme']): void {
+const KEPT = 'loopbay.theme';
+const show = (theme: Preferences['theme']) =>
+  void document.body.classList.toggle('bp6-dark', theme === 'dark' || (theme === 'system' && window.matchMedia('(prefers-color-scheme: dark)').matches));
+
+function lastTheme(): Preferences['theme'] {
+  const kept = localStorage.getItem(KEPT);
+  return kept === 'light' || kept === 'dark' ? kept : 'system';
+}
+
+/** Before it is known who sits there: the theme this device showed last, so that a dim bay sees no white flash. */
+export const showLastTheme = (): void => show(lastTheme());
+
+/** Puts the theme on the page: the device's own, or the one that is forced. Without one, what this device showed last. */
+export function useTheme(wanted?: Preferences['theme']): void {
   useEffect(() => {
+    const theme = wanted ?? lastTheme();
+    if (wanted) localStorage.setItem(KEPT, wanted);
     const media = window.matchMedia('(prefers-color-scheme: dark)');
-    const apply = () => document.body.classList.toggle('bp6-dark', theme === 'dark' || (theme === 'system' && media.matches));
+    const apply = () => show(theme);
     apply();
     media.addEventListener('change', apply);
     return () => media.removeEventListener('change', apply);
-  }, [theme]);
+  }, [wanted]);
 }
