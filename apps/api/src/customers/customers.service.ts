@@ -25,8 +25,8 @@ export class CustomersService {
   ) {}
 
   async page({ page, size, q }: CustomerQuery): Promise<CustomerPage> {
-    const where = q ? `WHERE c.name LIKE ?1 ESCAPE '\\' OR c.city LIKE ?1 ESCAPE '\\' OR c.contactName LIKE ?1 ESCAPE '\\' OR c.email LIKE ?1 ESCAPE '\\'` : '';
-    const sought = q ? [contains(q)] : [];
+    const where = q ? `WHERE c.name LIKE :q ESCAPE '\\' OR c.city LIKE :q ESCAPE '\\' OR c.contactName LIKE :q ESCAPE '\\' OR c.email LIKE :q ESCAPE '\\'` : '';
+    const sought = q ? [{ q: contains(q) }] : [];
     const total = await this.db.one<{ total: number }>(`SELECT COUNT(*) AS total FROM customers c ${where}`, sought);
     const rows = await this.db.all<CustomerPage['rows'][number]>(
       `SELECT c.id, c.name, c.city, c.email,

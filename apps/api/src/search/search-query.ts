@@ -24,21 +24,21 @@ const INVOICE_FROM = 'FROM invoices i JOIN customers c ON c.id = i.customerId';
  * beginning, then names somewhere inside. Newer ones first where nothing else decides.
  */
 export function searchStatement(typed: string, mayReadInvoices: boolean): { sql: string; parameters: readonly unknown[] } {
-  const parameters = [typed, startsWith(typed), `% ${startsWith(typed)}`, contains(typed)];
+  const parameters = [{ typed, start: startsWith(typed), word: `% ${startsWith(typed)}`, inside: contains(typed) }];
   const piece = (rank: number, select: string, from: string, where: string) => `SELECT * FROM (${select}, ${rank} AS rank ${from} WHERE ${where} ORDER BY id DESC LIMIT ${MOST_HITS})`;
-  const like = (column: string, nth: number) => `${column} LIKE ?${nth} ESCAPE '\\'`;
+  const like = (column: string, how: 'start' | 'word' | 'inside') => `${column} LIKE :${how} ESCAPE '\\'`;
   const pieces = [
-    piece(0, JOB, JOB_FROM, 'j.number = ?1 COLLATE NOCASE'),
-    piece(1, MACHINE, MACHINE_FROM, "m.serial = ?1 COLLATE NOCASE AND m.serial <> ''"),
-    piece(2, JOB, JOB_FROM, like('j.number', 2)),
-    piece(3, MACHINE, MACHINE_FROM, like('m.serial', 2)),
-    piece(4, CUSTOMER, 'FROM customers c', like('c.name', 2)),
-    piece(5, CUSTOMER, 'FROM customers c', like('c.name', 3)),
-    piece(5, MACHINE, MACHINE_FROM, `(${like('m.description', 2)} OR ${like('m.description', 3)})`),
-    piece(6, JOB, JOB_FROM, `(${like('j.number', 4)} OR ${like('j.customerReference', 2)})`),
-    piece(7, CUSTOMER, 'FROM customers c', like('c.name', 4)),
-    piece(7, MACHINE, MACHINE_FROM, `(${like('m.description', 4)} OR ${like('m.serial', 4)})`),
-    ...(mayReadInvoices ? [piece(0, INVOICE, INVOICE_FROM, 'i.number = ?1 COLLATE NOCASE'), piece(2, INVOICE, INVOICE_FROM, like('i.number', 2)), piece(6, INVOICE, INVOICE_FROM, like('i.number', 4))] : []),
+    piece(0, JOB, JOB_FROM, 'j.number = :typed COLLATE NOCASE'),
+    piece(1, MACHINE, MACHINE_FROM, "m.serial = :typed COLLATE NOCASE AND m.serial <> ''"),
+    piece(2, JOB, JOB_FROM, like('j.number', 'start')),
+    piece(3, MACHINE, MACHINE_FROM, like('m.serial', 'start')),
+    piece(4, CUSTOMER, 'FROM customers c', like('c.name', 'start')),
+    piece(5, CUSTOMER, 'FROM customers c', like('c.name', 'word')),
+    piece(5, MACHINE, MACHINE_FROM, `(${like('m.description', 'start')} OR ${like('m.description', 'word')})`),
+    piece(6, JOB, JOB_FROM, `(${like('j.number', 'inside')} OR ${like('j.customerReference', 'start')})`),
+    piece(7, CUSTOMER, 'FROM customers c', like('c.name', 'inside')),
+    piece(7, MACHINE, MACHINE_FROM, `(${like('m.description', 'inside')} OR ${like('m.serial', 'inside')})`),
+    ...(mayReadInvoices ? [piece(0, INVOICE, INVOICE_FROM, 'i.number = :typed COLLATE NOCASE'), piece(2, INVOICE, INVOICE_FROM, like('i.number', 'start')), piece(6, INVOICE, INVOICE_FROM, like('i.number', 'inside'))] : []),
   ];
   return {
     sql: `SELECT kind, id, title, detail, MIN(rank) AS rank FROM (${pieces.join(' UNION ALL ')}) GROUP BY kind, id ORDER BY rank, id DESC LIMIT ${MOST_HITS}`,
