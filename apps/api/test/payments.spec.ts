@@ -393,28 +393,6 @@ describe('the service and the shop by themselves', () => {
   });
 });
 
-describe('with the service sending its events by itself', () => {
-  it('paying on its page pays the invoice, repeated and late events and all', async () => {
-    const whole = await openPaymentTown({ events: 'delivered' });
-    try {
-      const clerk = await whole.shop.person(['manager']);
-      const theirs = await jobInShop(whole.shop, clerk);
-      const payer = await whole.shop.person(['customer'], { customerId: theirs.customerId });
-      const invoice = await issuedInvoice(whole.shop, clerk, theirs);
-      const { url } = (await payer.post(`/api/portal/invoices/${invoice.id}/checkout`, { version: 1 }).expect(201)).body;
-      whole.stripe.control.onEvents({ action: 'repeat', type: '*', copies: 5 });
-      const form = new URLSearchParams({ email: 'brandt@customer.test', name: 'H. Brandt', number: GOOD_CARD, expiry: '12 / 34', cvc: '123' });
-      const landed = await fetch(url, { method: 'POST', body: form, redirect: 'manual' });
-      expect(landed.headers.get('location')).toMatch(new RegExp(`^http://shop.test/portal/invoices/${invoice.id}/paid\\?session_id=cs_`));
-      await whole.stripe.control.settled();
-      expect((await payer.get(`/api/portal/invoices/${invoice.id}`)).body).toMatchObject({ state: 'paid', payments: [{ amountMinor: 75_669 }] });
-      expect(whole.stripe.control.deliveries().every((d) => d.state === 'delivered')).toBe(true);
-    } finally {
-      await whole.close();
-    }
-  });
-});
-
 describe('currencies without and with three decimals', () => {
   it.each([
     ['JPY', 500, 'jpy', 500],
