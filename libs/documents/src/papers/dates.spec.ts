@@ -12,6 +12,11 @@ describe('dates on papers', () => {
     expect(dayOf('2026-12-31T23:30:00.000Z', 'America/New_York')).toBe('31\u00a0December 2026');
   });
 
+  it('a day alone gets no time of day that nobody wrote down', () => {
+    expect(momentWords('2026-03-04', 'Europe/Berlin')).toBe('4\u00a0March 2026');
+    expect(momentWords('2026-03-04', 'America/New_York')).toBe('4\u00a0March 2026');
+  });
+
   it('prints what it was given where that is no date', () => {
     expect(dayWords('soon')).toBe('soon');
     expect(momentWords('soon', 'UTC')).toBe('soon');

@@ -15,8 +15,12 @@ export function dayWords(day: string): string {
   return name ? `${Number(date)}\u00a0${name} ${year}` : day;
 }
 
+/** Money by transfer is known to the day, not to the minute. */
+const DAY_ALONE = /^\d{4}-\d{2}-\d{2}$/;
+
 /** An instant as the shop's clock showed it; the calendar day alone where only that counts. */
 export function momentWords(instant: string, timeZone: string): string {
+  if (DAY_ALONE.test(instant)) return dayWords(instant);
   const { day, time } = local(instant, timeZone);
   return time ? `${dayWords(day)}, ${time}` : day;
 }
