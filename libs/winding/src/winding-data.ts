@@ -66,7 +66,7 @@ function countProblems(w: WindingData, say: Say): void {
   const span = w.spanTo - 1;
   const slotsPerPole = w.slots / w.poles;
   if (span >= w.slots) say('spanTo', 'span', 'The coil reaches further than the core has slots. Count the span again.');
-  else if (w.connection !== 'single' && span > 2 * slotsPerPole) say('spanTo', 'span', 'The coil spans more than two poles. Count the span, the slots and the poles again.');
+  else if (w.connection !== 'single' && span >= 2 * slotsPerPole) say('spanTo', 'span', 'The coil spans two poles or more. Count the span, the slots and the poles again.');
   if (w.connection === 'dc' || w.connection === 'single') return;
   const coils = (w.slots * w.layers) / 2;
   if (w.coils !== coils) {
