@@ -11,9 +11,9 @@ const LONE_SURROGATE = /\p{Surrogate}/gu;
 export function tidyFileName(given: string, kind: FileKind): string {
   const { extension, extensions } = FILE_KINDS[kind];
   const last = given.normalize('NFC').split(/[/\\]/).at(-1) ?? '';
-  const clean = last.replace(UNSAFE, '').replace(/^[\s.]+|[\s.]+$/g, '');
+  const clean = last.replace(UNSAFE, '').replace(/[\s.]+$/, '');
   const ending = extensions.find((e) => clean.toLowerCase().endsWith(`.${e}`));
-  const stem = ending ? clean.slice(0, -(ending.length + 1)).replace(/[\s.]+$/, '') : clean;
+  const stem = (ending ? clean.slice(0, -(ending.length + 1)) : clean).replace(/^[\s.]+|[\s.]+$/g, '');
   const short = [...(stem || 'file')].slice(0, LONGEST - 5).join('');
   return `${short}.${ending ?? extension}`;
 }
