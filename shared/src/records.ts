@@ -127,7 +127,7 @@ export const recordViewSchema = z.strictObject({
   result: z.record(z.string(), z.unknown()),
   calculation: z.string(),
   limitsVersion: z.number().int(),
-  instruments: z.array(z.strictObject({ id: idField, tag: z.string(), description: z.string(), dueOn: z.string(), calibratedOn: z.string(), certificateNumber: z.string(), overdueOnTheDay: z.boolean() })),
+  instruments: z.array(z.strictObject({ id: idField, tag: z.string(), description: z.string(), serial: z.string(), dueOn: z.string(), calibratedOn: z.string(), certificateNumber: z.string(), overdueOnTheDay: z.boolean() })),
   reason: z.string(),
   by: z.string(),
   at: z.string(),

@@ -118,7 +118,7 @@ function instrumentsOf(records: readonly CertifiedRecord[]): InstrumentOnPaper[]
   const seen = new Map<string, InstrumentOnPaper & { uses: Set<string> }>();
   for (const record of records) {
     for (const i of record.instruments) {
-      const entry = seen.get(i.id) ?? { use: '', name: `${i.tag}${i.description ? `, ${i.description}` : ''}`, serial: i.serial ?? '', calibratedOn: i.calibratedOn, dueOn: i.dueOn, uses: new Set<string>() };
+      const entry = seen.get(i.id) ?? { use: '', name: `${i.tag}${i.description ? `, ${i.description}` : ''}`, serial: i.serial, calibratedOn: i.calibratedOn, dueOn: i.dueOn, uses: new Set<string>() };
       entry.uses.add(record.kind === 'final-test' ? 'final test' : 'core test');
       seen.set(i.id, entry);
     }

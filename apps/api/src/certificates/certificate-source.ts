@@ -10,7 +10,7 @@ export interface CertifiedRecord {
   readonly verdict: string | null;
   readonly readings: Record<string, unknown>;
   readonly result: Record<string, unknown>;
-  readonly instruments: readonly { readonly id: string; readonly tag: string; readonly description: string; readonly serial?: string; readonly calibratedOn: string; readonly dueOn: string }[];
+  readonly instruments: readonly { readonly id: string; readonly tag: string; readonly description: string; readonly serial: string; readonly calibratedOn: string; readonly dueOn: string }[];
   readonly byName: string;
   readonly at: string;
 }

@@ -22,6 +22,7 @@ export interface InstrumentOnTheDay {
   readonly id: string;
   readonly tag: string;
   readonly description: string;
+  readonly serial: string;
   readonly dueOn: string;
   readonly calibratedOn: string;
   readonly certificateNumber: string;
@@ -90,6 +91,6 @@ export class InstrumentsService {
     const rows = await source.query<Row[]>(`SELECT ${COLUMNS} FROM instruments WHERE id IN (${wanted.map(() => '?').join(', ')}) ORDER BY tag`, wanted);
     if (rows.length !== wanted.length) throw new AppError('READINGS_NOT_VALID', 'One of the instruments is not in the register.');
     const today = this.today();
-    return rows.map((r) => ({ id: r.id, tag: r.tag, description: r.description, dueOn: r.dueOn, calibratedOn: r.calibratedOn, certificateNumber: r.certificateNumber, overdueOnTheDay: pastGrace(r.dueOn, today) }));
+    return rows.map((r) => ({ id: r.id, tag: r.tag, description: r.description, serial: r.serial, dueOn: r.dueOn, calibratedOn: r.calibratedOn, certificateNumber: r.certificateNumber, overdueOnTheDay: pastGrace(r.dueOn, today) }));
   }
 }
