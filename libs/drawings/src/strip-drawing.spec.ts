@@ -71,6 +71,22 @@ describe('stripDrawing', () => {
     }
   });
 
+  it('fits a phone with its words over the bars, in the same proportions', () => {
+    const narrow = strip({ narrow: true, after: [after, { ...after, label: 'after repair', value: 12.06, words: '12.06 ± 0.84' }] });
+    expect(narrow.width).toBe(340);
+    expect(outOfFrame(narrow)).toEqual([]);
+    expect(faultsOf(narrow.shapes)).toEqual([]);
+    expect(bars(narrow)[1]!.width / bars(narrow)[0]!.width).toBeCloseTo(2.41 / 2.03, 6);
+    for (const empty of [strip({ narrow: true, before: null, increase: null }), strip({ narrow: true, before: null, after: [], increase: null })]) expect(outOfFrame(empty)).toEqual([]);
+  });
+
+  it('keeps the words of a limit that lies at the very edge inside the frame', () => {
+    for (const narrow of [true, false]) {
+      expect(outOfFrame(strip({ narrow, limit: { value: 0.05, words: 'limit 0.05 W/kg, shop practice' } }))).toEqual([]);
+      expect(outOfFrame(strip({ narrow, limit: { value: 9, words: 'limit 9.00 W/kg, shop practice' } }))).toEqual([]);
+    }
+  });
+
   it('tells the same in words', () => {
     expect(strip().description).toBe('before 2.03 ± 0.14 W/kg; after 2.41 ± 0.17 W/kg. limit +20 % (2.44). Increase +18.7 % ± 2.4 points.');
   });

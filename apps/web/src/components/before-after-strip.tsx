@@ -1,15 +1,21 @@
-import { useMemo } from 'react';
-import type { CoreRecord } from '../lib/core-figures.js';
-import { coreStrip } from '../lib/core-strip.js';
+import { stripDrawing, type StripDrawingInput } from '@libs/drawings';
 import { defineText } from '../lib/text.js';
 import { Drawing } from './drawing.js';
-import { useUnits } from './units.js';
+import './before-after-strip.css';
 
-const t = defineText({ figures: 'Figures of the core tests' });
+const t = defineText({ table: 'Figures as a table' });
 
-/** The core's loss before and after on one scale, each with its uncertainty, and the limit where one applies. */
-export function BeforeAfterStrip({ records }: { readonly records: readonly CoreRecord[] }) {
-  const units = useUnits();
-  const drawing = useMemo(() => coreStrip(records, units), [records, units]);
-  return <Drawing drawing={drawing} withTable={t('figures')} />;
+/** Before and after on one scale; on a phone, and in a narrow panel, its words stand over the bars. */
+export function BeforeAfterStrip({ withTable = true, ...input }: StripDrawingInput & { readonly withTable?: boolean }) {
+  const table = withTable ? t('table') : undefined;
+  return (
+    <div className="lb-strip">
+      <div className="lb-strip-wide">
+        <Drawing drawing={stripDrawing({ ...input, narrow: false })} withTable={table} />
+      </div>
+      <div className="lb-strip-narrow">
+        <Drawing drawing={stripDrawing({ ...input, narrow: true })} withTable={table} />
+      </div>
+    </div>
+  );
 }

@@ -9,6 +9,8 @@ interface ConfirmDialogProps {
   readonly open: boolean;
   readonly title: string;
   readonly confirm: string;
+  /** the way back; 'Not now' unless told */
+  readonly cancel?: string;
   readonly pending?: boolean;
   readonly error?: unknown;
   readonly onConfirm: () => void;
@@ -17,7 +19,7 @@ interface ConfirmDialogProps {
 }
 
 /** Asked before something that cannot be taken back, or that needs a word with it. */
-export function ConfirmDialog({ open, title, confirm, pending, error, onConfirm, onClose, children }: ConfirmDialogProps) {
+export function ConfirmDialog({ open, title, confirm, cancel = t('cancel'), pending, error, onConfirm, onClose, children }: ConfirmDialogProps) {
   return (
     <Dialog isOpen={open} onClose={onClose} title={title}>
       <form
@@ -35,7 +37,7 @@ export function ConfirmDialog({ open, title, confirm, pending, error, onConfirm,
         <DialogFooter
           actions={
             <>
-              <Button text={t('cancel')} onClick={onClose} />
+              <Button text={cancel} onClick={onClose} />
               <Button type="submit" intent="primary" text={confirm} loading={pending} />
             </>
           }

@@ -1,5 +1,5 @@
-import type { Drawing as DrawingModel, Paint, Shape } from '@libs/drawings';
-import { Fragment, useId, type ReactNode } from 'react';
+import type { Drawing as DrawingModel, Ink, Paint, Shape } from '@libs/drawings';
+import { Fragment, useId, type ReactNode, type SVGProps } from 'react';
 import './drawing.css';
 
 const ink = (paint: Paint): string => (typeof paint === 'string' ? `var(--lb-${paint})` : `color-mix(in srgb, var(--lb-${paint.from}) ${Math.round((1 - paint.share) * 100)}%, var(--lb-${paint.to}))`);
@@ -9,15 +9,20 @@ interface DrawingProps {
   /** in CSS; the drawing keeps its proportions */
   readonly width?: string | number;
   readonly onMark?: (mark: string) => void;
+  /** the mark that is looked at: its shapes get an outline */
+  readonly shownMark?: string | undefined;
+  readonly svgProps?: Pick<SVGProps<SVGSVGElement>, 'onPointerMove' | 'onPointerLeave'>;
   /** figures behind the picture, offered below it */
   readonly withTable?: string;
   readonly decorative?: boolean;
 }
 
 /** Paints a drawing of `@libs/drawings` in the colours of the theme. */
-export function Drawing({ drawing, width = '100%', onMark, withTable, decorative = false }: DrawingProps) {
+export function Drawing({ drawing, width = '100%', onMark, shownMark, svgProps, withTable, decorative = false }: DrawingProps) {
   const id = useId();
-  const hatch = `hatch-${id}`;
+  // a pattern takes its colour from where it is defined, not from where it is used: one for each ink
+  const hatchOf = (of: Ink) => `hatch-${of}-${id}`;
+  const hatched = [...new Set(drawing.shapes.flatMap((s) => (s.kind === 'hatch' ? [s.ink] : [])))];
   const picture = (
     <svg
       className="lb-drawing"
@@ -28,6 +33,7 @@ export function Drawing({ drawing, width = '100%', onMark, withTable, decorative
         const mark = (event.target as Element).getAttribute('data-mark');
         if (mark && onMark) onMark(mark);
       }}
+      {...svgProps}
     >
       {!decorative && (
         <>
@@ -35,14 +41,20 @@ export function Drawing({ drawing, width = '100%', onMark, withTable, decorative
           <desc id={`${id}-d`}>{drawing.description}</desc>
         </>
       )}
-      <defs>
-        <pattern id={hatch} width="7" height="7" patternUnits="userSpaceOnUse" patternTransform="rotate(45)">
-          <path d="M0 0V7" stroke="currentColor" strokeWidth="1.5" />
-        </pattern>
-      </defs>
+      {hatched.length > 0 && (
+        <defs>
+          {hatched.map((of) => (
+            <pattern key={of} id={hatchOf(of)} width="7" height="7" patternUnits="userSpaceOnUse" patternTransform="rotate(45)">
+              <path d="M0 0V7" stroke={ink(of)} strokeWidth="1.6" />
+            </pattern>
+          ))}
+        </defs>
+      )}
       {drawing.shapes.map((shape, i) => (
-        <Fragment key={i}>{paint(shape, hatch)}</Fragment>
+        <Fragment key={i}>{paint(shape, hatchOf)}</Fragment>
       ))}
+      {shownMark !== undefined &&
+        drawing.shapes.map((shape, i) => (shape.kind === 'path' && shape.mark === shownMark ? <path key={`shown-${i}`} d={shape.d} fill="none" stroke="var(--lb-text)" strokeWidth="2" pointerEvents="none" /> : null))}
     </svg>
   );
   return withTable && drawing.table ? (
@@ -67,7 +79,7 @@ export function Drawing({ drawing, width = '100%', onMark, withTable, decorative
   );
 }
 
-function paint(shape: Shape, hatch: string): ReactNode {
+function paint(shape: Shape, hatchOf: (ink: Ink) => string): ReactNode {
   const mark = shape.mark ? { 'data-mark': shape.mark } : {};
   switch (shape.kind) {
     case 'path':
@@ -97,6 +109,6 @@ function paint(shape: Shape, hatch: string): ReactNode {
         </text>
       );
     case 'hatch':
-      return <rect x={shape.x} y={shape.y} width={shape.width} height={shape.height} fill={`url(#${hatch})`} style={{ color: `var(--lb-${shape.ink})` }} opacity={0.4} {...mark} />;
+      return <rect x={shape.x} y={shape.y} width={shape.width} height={shape.height} fill={`url(#${hatchOf(shape.ink)})`} opacity={0.55} {...mark} />;
   }
 }

@@ -1,8 +1,12 @@
 import { Button, Checkbox, HTMLSelect, InputGroup, TextArea } from '@blueprintjs/core';
-import { useId, type ReactNode } from 'react';
+import { Tick } from '@blueprintjs/icons';
+import { useId, useRef, type KeyboardEvent, type ReactNode } from 'react';
 import { useController, type Control, type FieldPath, type FieldValues } from 'react-hook-form';
+import { defineText } from '../lib/text.js';
 import { Field } from './field.js';
 import './fields.css';
+
+const t = defineText({ optional: '(optional)' });
 
 interface Common<F extends FieldValues> {
   readonly control: Control<F>;
@@ -91,25 +95,41 @@ export function SelectField<F extends FieldValues>({ control, name, label, help,
   );
 }
 
-/** A choice between few things, each a button large enough for a glove. */
+/** A choice between few things, each a button large enough for a glove; arrow keys move it, as in any group of radio buttons. */
 export function ChoiceField<F extends FieldValues>({ control, name, label, help, optional, wide, options }: Common<F> & { readonly options: readonly Option[] }) {
   const { field, fieldState } = useController({ control, name });
   const id = useId();
+  const buttons = useRef(new Map<number, HTMLElement>());
   const problem = fieldState.error?.message;
+  const chosen = options.findIndex((o) => o.value === field.value);
+  const onKeyDown = (event: KeyboardEvent, at: number) => {
+    const step = event.key === 'ArrowRight' || event.key === 'ArrowDown' ? 1 : event.key === 'ArrowLeft' || event.key === 'ArrowUp' ? -1 : 0;
+    if (step === 0) return;
+    event.preventDefault();
+    const next = (at + step + options.length) % options.length;
+    field.onChange(options[next]!.value);
+    buttons.current.get(next)?.focus();
+  };
   return (
     <fieldset className={`lb-choice${wide ? ' wide' : ''}`} aria-describedby={problem || help ? `${id}-help` : undefined}>
       <legend>
-        {label} {optional && <span className="muted">(optional)</span>}
+        {label} {optional && <span className="muted">{t('optional')}</span>}
       </legend>
-      <div className="lb-choice-buttons" role="radiogroup" aria-label={label}>
+      <div className="lb-choice-buttons" role="radiogroup" aria-label={label} aria-invalid={problem !== undefined} onBlur={field.onBlur}>
         {options.map((o, i) => (
           <Button
             key={o.value}
-            ref={i === 0 ? field.ref : undefined}
+            ref={(element: HTMLElement | null) => {
+              if (element) buttons.current.set(i, element);
+              if (i === 0) field.ref(element);
+            }}
             role="radio"
-            aria-checked={field.value === o.value}
-            className={field.value === o.value ? 'lb-chosen' : ''}
+            aria-checked={i === chosen}
+            tabIndex={i === Math.max(chosen, 0) ? 0 : -1}
+            className={i === chosen ? 'lb-chosen' : ''}
+            icon={i === chosen ? <Tick /> : undefined}
             onClick={() => field.onChange(o.value)}
+            onKeyDown={(event: KeyboardEvent) => onKeyDown(event, i)}
             text={o.label}
           />
         ))}
@@ -130,7 +150,7 @@ export function CheckField<F extends FieldValues>({ control, name, label, help }
   const words = fieldState.error?.message ?? help;
   return (
     <div className="lb-check">
-      <Checkbox id={id} inputRef={field.ref} checked={field.value === true} onChange={(e) => field.onChange(e.currentTarget.checked)} onBlur={field.onBlur} label={label} aria-describedby={words ? `${id}-help` : undefined} />
+      <Checkbox id={id} inputRef={field.ref} checked={field.value === true} onChange={(e) => field.onChange(e.currentTarget.checked)} onBlur={field.onBlur} label={label} aria-invalid={fieldState.error !== undefined} aria-describedby={words ? `${id}-help` : undefined} />
       {words && (
         <div id={`${id}-help`} className={fieldState.error ? 'lb-problem' : 'lb-help'} role={fieldState.error ? 'alert' : undefined}>
           {words}

@@ -10,16 +10,17 @@ interface MoneyFieldProps<F extends FieldValues> {
   readonly currency: string;
   readonly help?: string;
   readonly optional?: boolean;
+  readonly wide?: boolean;
 }
 
 /** An amount as text in the form; `parseMoney` reads it when the form is sent, and here for its words. */
-export function MoneyField<F extends FieldValues>({ control, name, label, currency, help, optional }: MoneyFieldProps<F>) {
+export function MoneyField<F extends FieldValues>({ control, name, label, currency, help, optional, wide }: MoneyFieldProps<F>) {
   const { field, fieldState } = useController({ control, name });
   const text = (field.value as string | undefined) ?? '';
   const parsed = text.trim() === '' ? null : parseMoney(text, currency);
   const problem = fieldState.error?.message ?? (parsed && !parsed.ok && fieldState.isTouched ? parsed.words : undefined);
   return (
-    <Field label={label} help={help} optional={optional} problem={problem}>
+    <Field label={label} unit={currency} help={help} optional={optional} wide={wide} problem={problem}>
       {({ id, describedBy, invalid }) => (
         <InputGroup
           id={id}
@@ -31,7 +32,7 @@ export function MoneyField<F extends FieldValues>({ control, name, label, curren
           value={text}
           onChange={(e) => field.onChange(e.target.value)}
           onBlur={field.onBlur}
-          rightElement={<span className="lb-quantity-unit">{currency}</span>}
+          rightElement={<span className="lb-quantity-unit" aria-hidden="true">{currency}</span>}
           aria-describedby={describedBy}
           aria-invalid={invalid}
         />

@@ -2,8 +2,11 @@ import { spineDrawing, spinePlaces, type SpineSheet } from '@libs/drawings';
 import { ROUTE_STEPS, GATE_BEFORE, stepIndex, type JobState, type Route, type Step } from '@shared/route';
 import { Link } from 'react-router-dom';
 import { stepName } from '../lib/step-names.js';
+import { defineText } from '../lib/text.js';
 import { Drawing } from './drawing.js';
 import './spine.css';
+
+const t = defineText({ done: 'done', open: 'open now', 'to-come': 'to come', skipped: 'left out', gateShut: ', gate shut' });
 
 export interface SpineJob {
   readonly route: Route;
@@ -45,8 +48,8 @@ export function Spine({ sheets, hrefOf, current, label }: SpineProps) {
             <li key={place.id} style={{ top: `${(place.y - 3) * scale}%`, height: `${(place.height + 6) * scale}%` }}>
               <Link to={hrefOf(place.id)} aria-current={place.id === current ? 'step' : undefined}>
                 <span className="visually-hidden">
-                  {sheet.label}, {STATE_WORDS[sheet.state]}
-                  {sheet.gate === 'shut' ? ', gate shut' : ''}
+                  {sheet.label}, {t(sheet.state)}
+                  {sheet.gate === 'shut' ? t('gateShut') : ''}
                 </span>
               </Link>
             </li>
@@ -56,8 +59,6 @@ export function Spine({ sheets, hrefOf, current, label }: SpineProps) {
     </nav>
   );
 }
-
-const STATE_WORDS = { done: 'done', open: 'open now', 'to-come': 'to come', skipped: 'left out' } as const;
 
 /** The same spine, small, for a row of a table. */
 export function MiniSpine({ job }: { readonly job: SpineJob }) {
