@@ -1,205 +1,236 @@
 import { createHash } from 'node:crypto';
-import { existsSync, readdirSync, writeFileSync } from 'node:fs';
+import { readdirSync, readFileSync, writeFileSync } from 'node:fs';
+import { request as httpRequest } from 'node:http';
+import type { AddressInfo } from 'node:net';
 import { join } from 'node:path';
 import sharp from 'sharp';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { attachmentViewSchema } from '@shared/jobs';
-import { AttachmentFiles } from '../src/attachments/attachment-files.js';
+import { attachmentViewSchema, type JobSheet } from '@shared/jobs';
 import { uploadsDir } from '../src/database/data-folder.js';
-import { ReadDb } from '../src/database/read-db.js';
-import { jobInShop, type JobInShop } from './job-in-shop.js';
+import { bookedIn, sheetOf } from './jobs-booking.js';
 import { openTestShop, type Person, type TestShop } from './test-app.js';
-
-const MB = 1024 * 1024;
-const PDF = Buffer.from('%PDF-1.4\n1 0 obj<</Type/Catalog>>endobj\ntrailer<</Root 1 0 R>>\n%%EOF\n');
 
 let shop: TestShop;
 let counter: Person;
-let job: JobInShop;
+let job: JobSheet;
+let photo: Buffer;
+const PDF = Buffer.from('%PDF-1.7\n1 0 obj<</Type/Catalog>>endobj\ntrailer<</Root 1 0 R>>\n%%EOF\n');
+
 beforeAll(async () => {
   shop = await openTestShop();
-  counter = await shop.person(['counter'], { name: 'Ilse Harm' });
-  job = await jobInShop(shop, counter);
+  await shop.app.listen(0, '127.0.0.1');
+  counter = await shop.person(['counter']);
+  job = await sheetOf(counter, (await bookedIn(counter)).id);
+  // a phone's photo, held upright: the sensor's picture lies on its side, and the file says where it was taken
+  photo = await sharp({ create: { width: 60, height: 40, channels: 3, background: '#b87333' } })
+    .jpeg()
+    .withMetadata({ orientation: 6 })
+    .withExifMerge({ IFD0: { Make: 'SECRETPHONE' }, IFD3: { GPSLatitudeRef: 'N', GPSLatitude: '50/1 30/1 0/1' } })
+    .toBuffer();
 });
 afterAll(() => shop.close());
 
-const send = (by: Person, bytes: Buffer, filename: string, jobId = job.jobId) => by.post(`/api/jobs/${jobId}/attachments`).attach('file', bytes, filename);
-const added = async (bytes: Buffer, filename: string) => attachmentViewSchema.parse((await send(counter, bytes, filename).expect(201)).body);
-const kept = () => readdirSync(uploadsDir(shop.config.dataDir)).sort();
-const colours = (width: number, height: number) => sharp({ create: { width, height, channels: 3, background: { r: 40, g: 90, b: 120 } } });
-/** A photo as a phone takes it: lying on its side, with the place it was taken at. */
-const phonePhoto = () =>
-  colours(60, 40)
-    .withExif({ IFD0: { Make: 'A phone', Orientation: '6' }, IFD3: { GPSLatitude: '48/1 0/1 0/1' } })
-    .withMetadata({ orientation: 6 })
-    .jpeg()
-    .toBuffer();
-
-describe('a photo or a paper hung on a job', () => {
-  it('is kept with who brought it and when, stands on the job sheet, and comes back the same', async () => {
-    const view = await added(await colours(30, 20).png().toBuffer(), 'Typenschild Größe 4.png');
-    expect(view).toMatchObject({ name: 'Typenschild Größe 4.png', mime: 'image/png', addedBy: 'Ilse Harm', addedAt: shop.clock.iso(), recordId: null });
-    expect((await counter.get(`/api/jobs/${job.jobId}`).expect(200)).body.attachments).toContainEqual(view);
-    const file = await counter.get(`/api/attachments/${view.id}`).buffer(true).expect(200);
-    expect(file.headers).toMatchObject({ 'content-type': 'image/png', 'x-content-type-options': 'nosniff', 'cache-control': 'no-store', 'content-length': String(view.sizeBytes) });
-    const row = await shop.app.get(ReadDb).one<{ sha256: string }>('SELECT sha256 FROM attachments WHERE id = ?', [view.id]);
-    expect(createHash('sha256').update(file.body as Buffer).digest('hex')).toBe(row?.sha256);
+const send = (bytes: Buffer, name: string, by = counter, to = job.id) => by.post(`/api/jobs/${to}/attachments`).attach('file', bytes, name);
+const stored = () => readdirSync(uploadsDir(shop.config.dataDir));
+const bytesOf = (path: string, by = counter) =>
+  by.get(path).buffer(true).parse((res, done) => {
+    const chunks: Buffer[] = [];
+    res.on('data', (c: Buffer) => chunks.push(c));
+    res.on('end', () => done(null, Buffer.concat(chunks)));
   });
 
-  it('is told in the history of the job', async () => {
-    const view = await added(PDF, 'order 4500017.pdf');
-    const [entry] = (await counter.get(`/api/jobs/${job.jobId}/history`).expect(200)).body;
-    expect(entry).toMatchObject({ event: 'attachment.added', who: 'Ilse Harm', words: 'Document added: order 4500017.pdf', data: { sizeBytes: view.sizeBytes } });
+describe('adding a photo', () => {
+  it('it is drawn anew: upright, without place, time and camera, and kept under a name nobody can guess', async () => {
+    expect(photo.includes('SECRETPHONE')).toBe(true);
+    expect(await sharp(photo).metadata()).toMatchObject({ width: 60, height: 40, orientation: 6 });
+    const view = attachmentViewSchema.parse((await send(photo, 'winding.jpg').expect(201)).body);
+    expect(view).toMatchObject({ name: 'winding.jpg', mime: 'image/jpeg', recordId: null });
+    const got = await bytesOf(`/api/attachments/${view.id}`).expect(200);
+    const bytes = got.body as Buffer;
+    expect(bytes.length).toBe(view.sizeBytes);
+    expect(bytes.includes('SECRETPHONE')).toBe(false);
+    const seen = await sharp(bytes).metadata();
+    expect(seen).toMatchObject({ width: 40, height: 60 });
+    expect(seen.exif).toBeUndefined();
+    expect(got.headers).toMatchObject({ 'content-type': 'image/jpeg', 'x-content-type-options': 'nosniff', 'content-disposition': `inline; filename="winding.jpg"; filename*=UTF-8''winding.jpg` });
+    expect(stored().every((name) => /^[0-9a-f]{40}\.(jpg|png|webp|pdf)$/.test(name))).toBe(true);
+    expect((await sheetOf(counter, job.id)).attachments.map((a) => a.id)).toContain(view.id);
+    expect((await counter.get(`/api/jobs/${job.id}/history`)).body[0]).toMatchObject({ event: 'attachment.added', data: { sha256: createHash('sha256').update(bytes).digest('hex') } });
   });
 
-  it('has its name written for every browser, in plain letters and in full', async () => {
-    const view = await added(await colours(8, 8).png().toBuffer(), 'Wicklung „A“ 50%.png');
-    const file = await counter.get(`/api/attachments/${view.id}`).expect(200);
-    // RFC 8187 section 3.2.3 encodes in UTF-8 what is no plain letter
-    expect(file.headers['content-disposition']).toContain(`filename*=UTF-8''${encodeURIComponent('Wicklung „A“ 50%.png')}`);
-    expect(file.headers['content-disposition']).toMatch(/^inline; filename="Wicklung A 50.png"; /);
+  it('a picture wider than 4000 points is made smaller, a small one stays', async () => {
+    const wide = await sharp({ create: { width: 5000, height: 20, channels: 3, background: '#fff' } }).png().toBuffer();
+    const view = (await send(wide, 'wide.png').expect(201)).body;
+    const got = (await bytesOf(`/api/attachments/${view.id}`)).body as Buffer;
+    expect(await sharp(got).metadata()).toMatchObject({ width: 4000, height: 16, format: 'png' });
   });
 
-  it('loses the way it came by: folders, line breaks and a wrong ending are taken off its name', async () => {
-    const view = await added(await colours(8, 8).png().toBuffer(), '..\\..\\x\\report.exe');
-    expect(view.name).toBe('report.exe.png');
-  });
-});
-
-describe('a picture', () => {
-  it('stands upright and does not tell where and with what it was taken', async () => {
-    const photo = await phonePhoto();
-    const before = await sharp(photo).metadata();
-    expect(before.orientation).toBe(6);
-    expect(before.exif).toBeDefined();
-    const view = await added(photo, 'photo.jpg');
-    const file = await counter.get(`/api/attachments/${view.id}`).buffer(true).expect(200);
-    const after = await sharp(file.body as Buffer).metadata();
-    expect(after).toMatchObject({ format: 'jpeg', width: 40, height: 60 });
-    expect(after.exif).toBeUndefined();
-    expect(after.orientation).toBeUndefined();
+  it('has a small picture for lists, drawn once', async () => {
+    const large = await sharp({ create: { width: 800, height: 400, channels: 3, background: '#123456' } }).webp().toBuffer();
+    const view = (await send(large, 'a.webp').expect(201)).body;
+    const first = await bytesOf(`/api/attachments/${view.id}/thumb`).expect(200);
+    expect(first.headers['content-type']).toBe('image/webp');
+    expect(await sharp(first.body as Buffer).metadata()).toMatchObject({ width: 320, height: 160 });
+    expect(readdirSync(join(shop.config.dataDir, 'thumbs'))).toHaveLength(1);
+    expect((await bytesOf(`/api/attachments/${view.id}/thumb`).expect(200)).body).toEqual(first.body);
   });
 
-  it('is at most 4000 pixels long, and its small picture 320', async () => {
-    const view = await added(await colours(4400, 100).png().toBuffer(), 'long.png');
-    const file = await counter.get(`/api/attachments/${view.id}`).buffer(true).expect(200);
-    expect((await sharp(file.body as Buffer).metadata()).width).toBe(4000);
-    const small = await counter.get(`/api/attachments/${view.id}/thumb`).buffer(true).expect(200);
-    expect(small.headers['content-type']).toBe('image/webp');
-    expect((await sharp(small.body as Buffer).metadata()).width).toBe(320);
+  it('a scanned paper is handed out to be saved, never shown inside the shop’s pages', async () => {
+    const view = (await send(PDF, 'Bestellung für Prüfung.pdf').expect(201)).body;
+    const got = await bytesOf(`/api/attachments/${view.id}`).expect(200);
+    expect(got.headers['content-type']).toBe('application/pdf');
+    expect(got.headers['content-disposition']).toBe(`attachment; filename="Bestellung fur Prufung.pdf"; filename*=UTF-8''Bestellung%20f%C3%BCr%20Pr%C3%BCfung.pdf`);
+    expect(got.body).toEqual(PDF);
+    await counter.get(`/api/attachments/${view.id}/thumb`).expect(404);
   });
 
-  it('that is broken in the middle is refused, and nothing of it stays', async () => {
-    const whole = await colours(400, 400).png({ compressionLevel: 0 }).toBuffer();
-    const before = kept();
-    const answer = await send(counter, whole.subarray(0, Math.floor(whole.length / 2)), 'half.png');
-    expect(answer.status).toBe(422);
-    expect(answer.body.code).toBe('FILE_NOT_ACCEPTED');
-    expect(kept()).toEqual(before);
-  });
-
-  it('of which the disk lost a byte is not served as if it were good', async () => {
-    const view = await added(await colours(16, 16).png().toBuffer(), 'plate.png');
-    const row = await shop.app.get(ReadDb).one<{ storedName: string }>('SELECT storedName FROM attachments WHERE id = ?', [view.id]);
-    writeFileSync(join(uploadsDir(shop.config.dataDir), row!.storedName), Buffer.alloc(view.sizeBytes));
-    await counter.get(`/api/attachments/${view.id}`).expect(500);
+  it.each([
+    ['../../etc/passwd.png', 'passwd.png'],
+    ['C:\\temp\\shaft.png', 'shaft.png'],
+    ['photo.png.exe', 'photo.png.exe.png'],
+    ['PHOTO.PNG', 'PHOTO.png'],
+    ['evil\u202egnp.png', 'evilgnp.png'],
+    [`${'x'.repeat(300)}.png`, `${'x'.repeat(115)}.png`],
+    ['⚙️ motor.png', '⚙️ motor.png'],
+  ])('the name %j is kept as %j', async (given, kept) => {
+    const png = await sharp({ create: { width: 2, height: 2, channels: 3, background: '#fff' } }).png().toBuffer();
+    expect((await send(png, given).expect(201)).body.name).toBe(kept);
   });
 });
 
 describe('what is not taken', () => {
-  it('a text that is called a.png is refused, whatever the browser says it is', async () => {
-    const before = kept();
-    const answer = await counter.post(`/api/jobs/${job.jobId}/attachments`).attach('file', Buffer.from('<script>alert(1)</script>'), { filename: 'a.png', contentType: 'image/png' });
-    expect(answer.status).toBe(422);
-    expect(answer.body).toMatchObject({ code: 'FILE_NOT_ACCEPTED' });
-    expect(kept()).toEqual(before);
+  const left = () => stored().length;
+
+  it.each([
+    ['text', Buffer.from('this is no picture'), 'a.png'],
+    ['a page', Buffer.from('<html><script>alert(1)</script></html>'), 'a.png'],
+    ['a drawing with a script', Buffer.from('<svg xmlns="http://www.w3.org/2000/svg" onload="alert(1)"/>'), 'a.svg'],
+    ['nothing at all', Buffer.alloc(0), 'a.png'],
+    ['a picture’s beginning with rubbish behind it', Buffer.concat([Buffer.from([0x89, 0x50, 0x4e, 0x47, 0x0d, 0x0a, 0x1a, 0x0a, 0, 0, 0, 13, 0x49, 0x48, 0x44, 0x52]), Buffer.alloc(400, 7)]), 'a.png'],
+    ['a picture that claims a hundred thousand points a side', Buffer.concat([Buffer.from([0x89, 0x50, 0x4e, 0x47, 0x0d, 0x0a, 0x1a, 0x0a, 0, 0, 0, 13, 0x49, 0x48, 0x44, 0x52, 0, 1, 0x86, 0xa0, 0, 1, 0x86, 0xa0, 8, 2, 0, 0, 0]), Buffer.alloc(60)]), 'bomb.png'],
+  ])('%s is refused, and nothing of it stays on the disk', async (_what, bytes, name) => {
+    const before = left();
+    const answer = await send(bytes, name);
+    expect([answer.status, answer.body.code]).toEqual([422, 'FILE_NOT_ACCEPTED']);
+    expect(left()).toBe(before);
   });
 
-  it('a drawing that could carry a script (SVG) is refused', async () => {
-    const answer = await send(counter, Buffer.from('<?xml version="1.0"?><svg xmlns="http://www.w3.org/2000/svg" onload="alert(1)"/>'), 'a.svg');
-    expect(answer.body.code).toBe('FILE_NOT_ACCEPTED');
+  it('a page hidden behind a real picture does not survive its being drawn anew', async () => {
+    const view = (await send(Buffer.concat([photo, Buffer.from('<script>alert(1)</script>')]), 'a.jpg').expect(201)).body;
+    expect(((await bytesOf(`/api/attachments/${view.id}`)).body as Buffer).includes('<script>')).toBe(false);
   });
 
-  it('fifty megabytes are refused by what the browser says of them', async () => {
-    const before = kept();
-    const answer = await send(counter, Buffer.alloc(50 * MB), 'film.png');
-    expect(answer.status).toBe(413);
-    expect(answer.body).toMatchObject({ code: 'FILE_TOO_LARGE', message: expect.stringContaining('15 MB') });
-    expect(kept()).toEqual(before);
+  it('without a form, without a file, for a job that is not there, or a record that is not of the job', async () => {
+    expect((await counter.post(`/api/jobs/${job.id}/attachments`, { file: 'x' })).body.code).toBe('NOT_MULTIPART');
+    expect((await counter.post(`/api/jobs/${job.id}/attachments`).field('note', 'x')).body.code).toBe('FILE_NOT_ACCEPTED');
+    await send(photo, 'a.jpg', counter, '019f0000-0000-7000-8000-000000000000').expect(404);
+    const before = left();
+    await counter.post(`/api/jobs/${job.id}/attachments?recordId=019f0000-0000-7000-8000-000000000000`).attach('file', photo, 'a.jpg').expect(404);
+    expect(left()).toBe(before);
   });
 
-  it('a file over the limit that hides its length is stopped on the way, and nothing of it stays', async () => {
-    const before = kept();
-    const boundary = 'xxFORMxx';
-    const head = `--${boundary}\r\ncontent-disposition: form-data; name="file"; filename="a.png"\r\ncontent-type: image/png\r\n\r\n`;
-    const request = counter.post(`/api/jobs/${job.jobId}/attachments`).set('content-type', `multipart/form-data; boundary=${boundary}`).set('transfer-encoding', 'chunked');
-    request.write(head);
-    for (let sent = 0; sent < 17; sent += 1) request.write(Buffer.alloc(MB) as unknown as string);
-    request.write(`\r\n--${boundary}--\r\n`);
-    const answer = await request;
-    expect(answer.status).toBe(413);
-    expect(answer.body.code).toBe('FILE_TOO_LARGE');
-    expect(kept()).toEqual(before);
-  });
-
-  it('a message that is no form, a form without a file, and a job that is not there', async () => {
-    expect((await counter.post(`/api/jobs/${job.jobId}/attachments`, { file: 'x' })).body.code).toBe('NOT_MULTIPART');
-    const empty = await counter.post(`/api/jobs/${job.jobId}/attachments`).field('note', 'no file');
-    expect(empty.status).toBeGreaterThanOrEqual(400);
-    expect(empty.status).toBeLessThan(500);
-    await send(counter, PDF, 'a.pdf', 'no-such-job').expect(404);
-  });
-
-  it('a record of another job is no place for it', async () => {
-    await counter.post(`/api/jobs/${job.jobId}/attachments?recordId=no-such-record`).attach('file', PDF, 'a.pdf').expect(404);
-    await counter.post(`/api/jobs/${job.jobId}/attachments?owner=me`).attach('file', PDF, 'a.pdf').expect(400);
+  it('a form that breaks off is refused, and leaves nothing', async () => {
+    const before = left();
+    const answer = await counter
+      .post(`/api/jobs/${job.id}/attachments`)
+      .set('content-type', 'multipart/form-data; boundary=xx')
+      .send('--xx\r\nContent-Disposition: form-data; name="file"; filename="a.png"\r\nContent-Type: image/png\r\n\r\nhalf a pict' as never);
+    expect(answer.status).toBe(400);
+    expect(left()).toBe(before);
   });
 });
 
-describe('what a customer may see', () => {
-  it('the pictures of their own jobs, and of nobody else’s: those answer as if they did not exist', async () => {
-    const mine = await shop.person(['customer'], { customerId: job.customerId });
-    const other = await jobInShop(shop, counter);
-    const stranger = await shop.person(['customer'], { customerId: other.customerId });
-    const view = await added(await colours(20, 20).webp().toBuffer(), 'winding.webp');
-    await mine.get(`/api/portal/attachments/${view.id}`).expect(200);
-    await mine.get(`/api/portal/attachments/${view.id}/thumb`).expect(200);
-    const notMine = await stranger.get(`/api/portal/attachments/${view.id}`);
-    const notThere = await stranger.get('/api/portal/attachments/no-such-file');
-    expect(notMine.status).toBe(404);
-    expect({ ...notMine.body, requestId: '' }).toEqual({ ...notThere.body, requestId: '' });
-    await stranger.get(`/api/portal/attachments/${view.id}/thumb`).expect(404);
-  });
-
-  it('no papers hung on the job by the shop, and nothing through the shop’s own addresses', async () => {
-    const mine = await shop.person(['customer'], { customerId: job.customerId });
-    const paper = await added(PDF, 'price of the bearing.pdf');
-    await mine.get(`/api/portal/attachments/${paper.id}`).expect(404);
-    await mine.get(`/api/attachments/${paper.id}`).expect(403);
-    await send(mine, PDF, 'a.pdf').expect(403);
-    await shop.nobody.get(`/api/attachments/${paper.id}`).expect(401);
-  });
-});
-
-describe('a paper', () => {
-  it('is kept as it came, is saved rather than shown, and has no small picture', async () => {
-    const view = await added(PDF, 'drawing.pdf');
-    const file = await counter.get(`/api/attachments/${view.id}`).buffer(true).parse((res, done) => {
-      const pieces: Buffer[] = [];
-      res.on('data', (piece: Buffer) => pieces.push(piece));
-      res.on('end', () => done(null, Buffer.concat(pieces)));
+describe('fifty megabytes', () => {
+  const MB = 1024 * 1024;
+  /** Sends until it is answered; tells how much had been sent by then, and what the process grew by. */
+  function pour(declare: boolean): Promise<{ status: number; code: string; sentMb: number; grewMb: number }> {
+    const { port } = shop.app.getHttpServer().address() as AddressInfo;
+    const head = Buffer.from('--xx\r\nContent-Disposition: form-data; name="file"; filename="film.jpg"\r\nContent-Type: image/jpeg\r\n\r\n');
+    const tail = Buffer.from('\r\n--xx--\r\n');
+    const before = process.memoryUsage().rss;
+    let peak = before;
+    return new Promise((resolve, reject) => {
+      let sent = 0;
+      let answered = false;
+      const req = httpRequest(
+        { port, host: '127.0.0.1', method: 'POST', path: `/api/jobs/${job.id}/attachments`, headers: { origin: 'http://shop.test', cookie: cookieOf(counter), 'content-type': 'multipart/form-data; boundary=xx', ...(declare ? { 'content-length': head.length + 50 * MB + tail.length } : {}) } },
+        (res) => {
+          answered = true;
+          const chunks: Buffer[] = [];
+          res.on('data', (c: Buffer) => chunks.push(c));
+          res.on('end', () => {
+            const body = JSON.parse(Buffer.concat(chunks).toString()) as { code: string };
+            req.destroy();
+            resolve({ status: res.statusCode!, code: body.code, sentMb: sent / MB, grewMb: (peak - before) / MB });
+          });
+        },
+      );
+      req.on('error', (error) => (answered ? undefined : reject(error)));
+      const chunk = Buffer.alloc(MB / 4, 0xff);
+      const more = () => {
+        if (answered) return;
+        peak = Math.max(peak, process.memoryUsage().rss);
+        if (sent >= 50 * MB) return void req.end(tail);
+        sent += chunk.length;
+        req.write(chunk, () => setTimeout(more, 1));
+      };
+      req.write(head, more);
     });
-    expect(Buffer.compare(file.body as Buffer, PDF)).toBe(0);
-    expect(file.headers['content-disposition']).toMatch(/^attachment; /);
-    await counter.get(`/api/attachments/${view.id}/thumb`).expect(404);
+  }
+
+  it('said beforehand, they are refused before they are sent', async () => {
+    const answer = await pour(true);
+    expect(answer).toMatchObject({ status: 413, code: 'FILE_TOO_LARGE' });
+    expect(answer.sentMb).toBeLessThan(10);
+  });
+
+  it('not said beforehand, they are refused at the limit, and the shop’s computer hardly notices', async () => {
+    const before = stored().length;
+    const answer = await pour(false);
+    expect(answer).toMatchObject({ status: 413, code: 'FILE_TOO_LARGE' });
+    expect(answer.sentMb).toBeGreaterThan(14);
+    expect(answer.sentMb).toBeLessThan(30);
+    expect(answer.grewMb).toBeLessThan(60);
+    expect(stored().length).toBe(before);
   });
 });
 
-it('what a broken-off upload left behind is gone when the shop starts again', async () => {
-  const second = await openTestShop();
-  const left = join(uploadsDir(second.config.dataDir), 'abc.part');
-  writeFileSync(left, 'half');
-  await new AttachmentFiles(second.config.dataDir).sweep();
-  expect(existsSync(left)).toBe(false);
-  await second.close();
+describe('who sees what', () => {
+  it('a customer sees the photos of their own jobs; another’s, a paper and nothing at all look alike', async () => {
+    const other = await sheetOf(counter, (await bookedIn(counter)).id);
+    const own = (await send(photo, 'own.jpg').expect(201)).body;
+    const paper = (await send(PDF, 'supplier.pdf').expect(201)).body;
+    const theirs = (await send(photo, 'theirs.jpg', counter, other.id).expect(201)).body;
+    const portal = await shop.person(['customer'], { customerId: job.customer.id });
+    await portal.get(`/api/portal/attachments/${own.id}`).expect(200);
+    await portal.get(`/api/portal/attachments/${own.id}/thumb`).expect(200);
+    const refusals = [];
+    for (const id of [theirs.id, paper.id, '019f0000-0000-7000-8000-000000000000']) {
+      for (const ending of ['', '/thumb']) {
+        const { status, body } = await portal.get(`/api/portal/attachments/${id}${ending}`);
+        refusals.push({ status, body: { ...body, requestId: '' } });
+      }
+    }
+    expect(new Set(refusals.map((r) => JSON.stringify(r))).size).toBe(1);
+    expect(refusals[0]!.status).toBe(404);
+    await portal.get(`/api/attachments/${own.id}`).expect(403);
+    await send(photo, 'a.jpg', portal).expect(403);
+    await shop.nobody.get(`/api/attachments/${own.id}`).expect(401);
+  });
+
+  it('a file that was damaged or lost on the disk is never handed out as if it were good', async () => {
+    const view = (await send(photo, 'hurt.jpg').expect(201)).body;
+    const names = stored().map((name) => join(uploadsDir(shop.config.dataDir), name));
+    for (const name of names) {
+      const bytes = readFileSync(name);
+      bytes[bytes.length - 1] = bytes[bytes.length - 1]! ^ 1;
+      writeFileSync(name, bytes);
+    }
+    const answer = await counter.get(`/api/attachments/${view.id}`);
+    expect(answer.status).toBe(500);
+    expect(answer.body.message).toContain('backup');
+    await counter.get(`/api/attachments/${view.id}/thumb`).expect(500);
+  });
 });
+
+const cookieOf = (person: Person): string => (person as unknown as { cookie: string }).cookie;
