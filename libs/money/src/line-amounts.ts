@@ -28,7 +28,7 @@ export interface LineAmounts {
  * @returns net and tax in minor units.
  * @throws {MoneyError} when an argument is not whole, out of range, or the amount cannot be reckoned exactly.
  *
- * Source: common practice (rounding per line, half away from zero); the shop's rule, printed in docs/money.md.
+ * Source: common practice (rounding per line, half away from zero); the shop's rule.
  *
  * @example
  * // 1.5 h at 85.33 with 19 %: 127.995 rounds to 128.00, its tax is 24.32

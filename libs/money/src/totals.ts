@@ -26,7 +26,7 @@ export interface Totals<L extends PricedLine> {
  * @returns the lines with their amounts, the summary by rate, and the sums in minor units.
  * @throws {MoneyError} as `lineAmounts` does, or when a sum cannot be reckoned exactly.
  *
- * Source: common practice (tax per line by rate); the shop's rule, printed in docs/money.md.
+ * Source: common practice (tax per line by rate); the shop's rule.
  *
  * @example
  * totals([{ quantityThousandths: 2000, unitPriceMinor: 5, taxRateBasisPoints: 1900 }, { quantityThousandths: 1000, unitPriceMinor: 100, taxRateBasisPoints: 700 }]).grossMinor;
