@@ -11,37 +11,44 @@ export function jobOfAddress(typed: string): string | null {
   return /\/jobs\/([0-9a-z-]{8,40})(?:[/?#].*)?$/.exec(typed)?.[1] ?? null;
 }
 
-const JOB = `SELECT 'job' AS kind, j.id AS id, j.number AS title, c.name || ' · ' || m.description AS detail`;
-const JOB_FROM = 'FROM jobs j JOIN customers c ON c.id = j.customerId JOIN machines m ON m.id = j.machineId';
-const MACHINE = `SELECT 'machine' AS kind, m.id AS id, m.description AS title, c.name || CASE WHEN m.serial = '' THEN '' ELSE ' · ' || m.serial END AS detail`;
-const MACHINE_FROM = 'FROM machines m JOIN customers c ON c.id = m.customerId';
-const CUSTOMER = `SELECT 'customer' AS kind, c.id AS id, c.name AS title, c.city AS detail`;
-const INVOICE = `SELECT 'invoice' AS kind, i.id AS id, i.number AS title, c.name AS detail`;
-const INVOICE_FROM = 'FROM invoices i JOIN customers c ON c.id = i.customerId';
+const like = (column: string, how: 'start' | 'word' | 'inside') => `${column} LIKE :${how} ESCAPE '\\'`;
+const either = (...conditions: string[]) => conditions.join(' OR ');
+
+/** The best of one table, read once: what matches anywhere, ranked by where it matches. */
+const best = (kind: SearchHit['kind'], table: string, where: string, ranks: readonly (readonly [string, number])[], otherwise: number) =>
+  `SELECT * FROM (SELECT '${kind}' AS kind, id, CASE ${ranks.map(([when, rank]) => `WHEN ${when} THEN ${rank}`).join(' ')} ELSE ${otherwise} END AS rank FROM ${table} WHERE ${where} ORDER BY rank, id DESC LIMIT ${MOST_HITS})`;
+
+const is = (column: string) => `${column} = :typed COLLATE NOCASE`;
+const JOBS = best('job', 'jobs', either(like('number', 'inside'), like('customerReference', 'start')), [[is('number'), 0], [like('number', 'start'), 2]], 6);
+const MACHINES = best(
+  'machine',
+  'machines',
+  either(like('serial', 'inside'), like('description', 'inside')),
+  [[is('serial'), 1], [like('serial', 'start'), 3], [either(like('description', 'start'), like('description', 'word')), 5]],
+  7,
+);
+const CUSTOMERS = best('customer', 'customers', like('name', 'inside'), [[like('name', 'start'), 4], [like('name', 'word'), 5]], 7);
+const INVOICES = best('invoice', 'invoices', like('number', 'inside'), [[is('number'), 0], [like('number', 'start'), 2]], 6);
+
+/** What a hit shows; read for the dozen that are shown, not for all that match. */
+const SHOWN = `SELECT f.kind, f.id, f.rank,
+    CASE f.kind WHEN 'job' THEN j.number WHEN 'machine' THEN m.description WHEN 'customer' THEN c.name ELSE i.number END AS title,
+    CASE f.kind WHEN 'job' THEN jc.name || ' · ' || jm.description WHEN 'machine' THEN mc.name || CASE WHEN m.serial = '' THEN '' ELSE ' · ' || m.serial END WHEN 'customer' THEN c.city ELSE ic.name END AS detail
+  FROM found f
+    LEFT JOIN jobs j ON f.kind = 'job' AND j.id = f.id LEFT JOIN customers jc ON jc.id = j.customerId LEFT JOIN machines jm ON jm.id = j.machineId
+    LEFT JOIN machines m ON f.kind = 'machine' AND m.id = f.id LEFT JOIN customers mc ON mc.id = m.customerId
+    LEFT JOIN customers c ON f.kind = 'customer' AND c.id = f.id
+    LEFT JOIN invoices i ON f.kind = 'invoice' AND i.id = f.id LEFT JOIN customers ic ON ic.id = i.customerId
+  ORDER BY f.rank, f.id DESC`;
 
 /**
  * Looks where a person at the counter would: the number on the tag first, then the serial, then names from their
  * beginning, then names somewhere inside. Newer ones first where nothing else decides.
  */
 export function searchStatement(typed: string, mayReadInvoices: boolean): { sql: string; parameters: readonly unknown[] } {
-  const parameters = [{ typed, start: startsWith(typed), word: `% ${startsWith(typed)}`, inside: contains(typed) }];
-  const piece = (rank: number, select: string, from: string, where: string) => `SELECT * FROM (${select}, ${rank} AS rank ${from} WHERE ${where} ORDER BY id DESC LIMIT ${MOST_HITS})`;
-  const like = (column: string, how: 'start' | 'word' | 'inside') => `${column} LIKE :${how} ESCAPE '\\'`;
-  const pieces = [
-    piece(0, JOB, JOB_FROM, 'j.number = :typed COLLATE NOCASE'),
-    piece(1, MACHINE, MACHINE_FROM, "m.serial = :typed COLLATE NOCASE AND m.serial <> ''"),
-    piece(2, JOB, JOB_FROM, like('j.number', 'start')),
-    piece(3, MACHINE, MACHINE_FROM, like('m.serial', 'start')),
-    piece(4, CUSTOMER, 'FROM customers c', like('c.name', 'start')),
-    piece(5, CUSTOMER, 'FROM customers c', like('c.name', 'word')),
-    piece(5, MACHINE, MACHINE_FROM, `(${like('m.description', 'start')} OR ${like('m.description', 'word')})`),
-    piece(6, JOB, JOB_FROM, `(${like('j.number', 'inside')} OR ${like('j.customerReference', 'start')})`),
-    piece(7, CUSTOMER, 'FROM customers c', like('c.name', 'inside')),
-    piece(7, MACHINE, MACHINE_FROM, `(${like('m.description', 'inside')} OR ${like('m.serial', 'inside')})`),
-    ...(mayReadInvoices ? [piece(0, INVOICE, INVOICE_FROM, 'i.number = :typed COLLATE NOCASE'), piece(2, INVOICE, INVOICE_FROM, like('i.number', 'start')), piece(6, INVOICE, INVOICE_FROM, like('i.number', 'inside'))] : []),
-  ];
+  const tables = [JOBS, MACHINES, CUSTOMERS, ...(mayReadInvoices ? [INVOICES] : [])];
   return {
-    sql: `SELECT kind, id, title, detail, MIN(rank) AS rank FROM (${pieces.join(' UNION ALL ')}) GROUP BY kind, id ORDER BY rank, id DESC LIMIT ${MOST_HITS}`,
-    parameters,
+    sql: `WITH found AS MATERIALIZED (SELECT kind, id, rank FROM (${tables.join(' UNION ALL ')}) ORDER BY rank, id DESC LIMIT ${MOST_HITS}) ${SHOWN}`,
+    parameters: [{ typed, start: startsWith(typed), word: `% ${startsWith(typed)}`, inside: contains(typed) }],
   };
 }
