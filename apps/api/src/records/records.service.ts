@@ -123,7 +123,7 @@ export class RecordsService {
   }
 
   private async keepRevision(manager: EntityManager, actor: Actor, head: { id: string; revision: number }, record: RecordInput, derived: Derived, reason: string): Promise<void> {
-    const content = { readings: record.readings, entered: record.entered, result: derived.evaluation.result, limitsVersion: derived.limitsVersion, instruments: derived.instruments };
+    const content = { recordId: head.id, revision: head.revision, readings: record.readings, entered: record.entered, result: derived.evaluation.result, limitsVersion: derived.limitsVersion, instruments: derived.instruments };
     await manager.insert(RecordRevision, {
       id: this.ids.next(),
       recordId: head.id,
