@@ -1,3 +1,6 @@
 import type { RouteObject } from 'react-router-dom';
 
-export const bayRoutes: RouteObject[] = [];
+export const bayRoutes: RouteObject[] = [
+  { path: 'jobs/:id/work/core-test-before', lazy: () => import('./bay/core-test-page.js').then((m) => ({ Component: m.CoreTestBeforePage })) },
+  { path: 'jobs/:id/work/core-test-after', lazy: () => import('./bay/core-test-page.js').then((m) => ({ Component: m.CoreTestAfterPage })) },
+];

@@ -1,0 +1,28 @@
+import type { JobSheet } from '@shared/jobs';
+import { RECORD_FROM_STEP, type RecordKind } from '@shared/records';
+import { Link } from 'react-router-dom';
+import { Empty } from '../../../components/faces.js';
+import { PageHeader } from '../../../components/panel.js';
+import { stepName } from '../../../lib/step-names.js';
+import { defineText } from '../../../lib/text.js';
+
+const t = defineText({
+  title: 'The job has not come to this yet',
+  words: 'It stands at “{at}”; this is recorded from “{from}” on. Move the job first.',
+  toJob: 'To the job {number}',
+});
+
+/** What lies ahead of the job cannot be recorded; the job sheet is where it is moved. */
+export function NotOpenYet({ job, kind, title }: { readonly job: JobSheet; readonly kind: RecordKind; readonly title: string }) {
+  return (
+    <div>
+      <PageHeader title={`${title} · ${job.number}`} />
+      <Empty title={t('title')}>
+        <p>{t('words', { at: stepName(job.step), from: stepName(RECORD_FROM_STEP[kind]) })}</p>
+        <p>
+          <Link to={`/jobs/${job.id}`}>{t('toJob', { number: job.number })}</Link>
+        </p>
+      </Empty>
+    </div>
+  );
+}
