@@ -66,6 +66,10 @@ describe('High potential', () => {
     [{ supply: 'dc', appliedVoltsV: 1800 }, 'not-valid'],
     [{ supply: 'dc', appliedVoltsV: 3060 }, 'conforms'],
   ] as const)('%j: %s', (more, verdict) => expect(verdictOf('high-potential', part('highPotential', more))).toBe(verdict));
+  it('a digit too many is asked about, not passed over in silence', () => {
+    expect(evaluateFinalTest(part('highPotential', { appliedVoltsV: 18_000 })).warnings).toMatchObject([{ path: 'highPotential.appliedVoltsV', code: 'over-level' }]);
+    expect(evaluateFinalTest(part('highPotential', { appliedVoltsV: 1900 })).warnings).toEqual([]);
+  });
   it('an old winding that was only cleaned is not asked for 100 MΩ', () => {
     const cleaned = { ...part('highPotential', { case: 'reconditioned', appliedVoltsV: 1170 }), insulation: { ...insulation, resistanceOhm: 40e6, windingTemperatureC: 40 } };
     expect(evaluateFinalTest(cleaned).verdict).toBe('conforms');

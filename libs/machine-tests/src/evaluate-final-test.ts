@@ -7,6 +7,7 @@ import {
   deriveBearings,
   deriveNoLoad,
   deriveVibration,
+  highPotentialWarnings,
   judgeBearings,
   judgeHighPotential,
   judgeNoLoad,
@@ -59,6 +60,7 @@ export function evaluateFinalTest(
   const derived = deriveFinal(readings, limits);
   const { judgements, notDone } = judgeParts(readings, derived, limits);
   const warnings = insulationWarnings(readings.insulation);
+  if (readings.highPotential && derived.highPotential) warnings.push(...highPotentialWarnings(readings.highPotential, derived.highPotential));
   if (readings.noLoad && derived.noLoad) warnings.push(...noLoadWarnings(readings.noLoad, derived.noLoad));
   return conclude(judgements, { notDone, demanded }, warnings, derived);
 }

@@ -26,6 +26,14 @@ export function judgeHighPotential(r: HighPotentialReading, level: HighPotential
   return judgement('high-potential', row, r.appliedVoltsV, 'conforms', `It held ${r.appliedVoltsV} V for ${r.seconds} s, ${asked} asked.`);
 }
 
+/** More than this over the level strains good insulation, or is a digit too many. */
+const OVER_LEVEL = 1.1;
+
+export function highPotentialWarnings(r: HighPotentialReading, level: HighPotentialLevel): MachineTestProblem[] {
+  if (r.appliedVoltsV <= OVER_LEVEL * level.voltsV) return [];
+  return [{ path: 'highPotential.appliedVoltsV', code: 'over-level', message: `${r.appliedVoltsV} V is far over the ${figureWords(level.voltsV)} V asked. Check the figure; if it was so, say why.` }];
+}
+
 export interface NoLoadDerived {
   /** The volts the run is judged at. */
   ratedVoltageV: number;

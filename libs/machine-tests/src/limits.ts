@@ -16,6 +16,7 @@ const practice = (value: number, unit: string, source: string): MachineTestLimit
 const IEEE43 = 'IEEE 43-2013, one minute, at 40 °C (figure from memory)';
 const HIGH_POTENTIAL = 'ANSI/EASA AR100, NEMA MG 1, IEC 60034-1 (AC figures from memory)';
 const VIBRATION = 'IEC 60034-14:2003, grade A';
+const VIBRATION_B = 'IEC 60034-14:2003, grade B';
 const NEMA_VIBRATION = 'NEMA MG 1 Part 7, as in ANSI/EASA AR100-2015 4.5.6';
 
 /**
@@ -54,6 +55,11 @@ export const DEFAULT_MACHINE_TEST_LIMITS = {
   vibrationRigidTo132: standard(1.3e-3, 'm/s', `${VIBRATION}, rigid mounting, shaft height to 132 mm`),
   vibrationRigidTo280: standard(1.8e-3, 'm/s', `${VIBRATION}, rigid mounting, shaft height over 132 to 280 mm`),
   vibrationRigidAbove280: standard(2.3e-3, 'm/s', `${VIBRATION}, rigid mounting, shaft height over 280 mm`),
+  vibrationGradeBFreeTo132: standard(0.7e-3, 'm/s', `${VIBRATION_B}, free suspension, shaft height to 132 mm`),
+  vibrationGradeBFreeTo280: standard(1.1e-3, 'm/s', `${VIBRATION_B}, free suspension, shaft height over 132 to 280 mm`),
+  vibrationGradeBFreeAbove280: standard(1.8e-3, 'm/s', `${VIBRATION_B}, free suspension, shaft height over 280 mm`),
+  vibrationGradeBRigidTo280: standard(0.9e-3, 'm/s', `${VIBRATION_B}, rigid mounting, shaft height over 132 to 280 mm`),
+  vibrationGradeBRigidAbove280: standard(1.5e-3, 'm/s', `${VIBRATION_B}, rigid mounting, shaft height over 280 mm`),
   vibrationNemaResilient: standard(3.81e-3, 'm/s', `${NEMA_VIBRATION}: 0.15 in/s peak, resilient mounting`),
   vibrationNemaRigid: standard(3.048e-3, 'm/s', `${NEMA_VIBRATION}: 0.8 of resilient, 0.12 in/s peak`),
   bearingRiseK: practice(45, 'K', 'housing 45 K over ambient'),

@@ -73,6 +73,8 @@ export interface NoLoadReading {
 export interface VibrationReading {
   standard: 'iec-60034-14-2003' | 'nema-mg1';
   mounting: 'free-suspension' | 'rigid';
+  /** Of the IEC table; A unless told. B is for machines with special needs. NEMA knows no grades. */
+  grade?: 'A' | 'B' | undefined;
   shaftHeightM: number | null;
   speedRpm: number | null;
   /** rms by IEC, peak by NEMA. */

@@ -9,6 +9,15 @@ describe('Vibration limits', () => {
   ] as const)('%s, shaft height %d mm: %d mm/s rms', (mounting, heightMm, mmPerS) => {
     expect(vibrationLimit({ standard: 'iec-60034-14-2003', mounting, shaftHeightM: heightMm / 1000, speedRpm: null }).value * 1000).toBeCloseTo(mmPerS, 9);
   });
+  // Source: IEC 60034-14:2003 table, grade B, read in two copies.
+  it.each([
+    ['free-suspension', 132, 0.7], ['free-suspension', 280, 1.1], ['free-suspension', 281, 1.8], ['rigid', 133, 0.9], ['rigid', 280, 0.9], ['rigid', 315, 1.5],
+  ] as const)('grade B, %s, shaft height %d mm: %d mm/s rms', (mounting, heightMm, mmPerS) => {
+    expect(vibrationLimit({ standard: 'iec-60034-14-2003', mounting, grade: 'B', shaftHeightM: heightMm / 1000, speedRpm: null }).value * 1000).toBeCloseTo(mmPerS, 9);
+  });
+  it('grade B has no figure for small machines on rigid mounts, and says so', () => {
+    expect(() => vibrationLimit({ standard: 'iec-60034-14-2003', mounting: 'rigid', grade: 'B', shaftHeightM: 0.132, speedRpm: null })).toThrow(/take grade A/);
+  });
   // Source: NEMA MG 1 Part 7 as in ANSI/EASA AR100-2015 4.5.6: 0.15 in/s peak, rigid 0.8 of it, 0.0025 in p-p up to 1200 rpm.
   it('NEMA allows 3.8 mm/s peak on resilient mounts and 3.0 on rigid', () => {
     const of = (mounting: 'free-suspension' | 'rigid', speedRpm: number) => vibrationLimit({ standard: 'nema-mg1', mounting, shaftHeightM: null, speedRpm }).value * 1000;
