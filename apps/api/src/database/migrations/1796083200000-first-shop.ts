@@ -42,8 +42,10 @@ export class FirstShop1796083200000 implements MigrationInterface {
     await runner.query(`CREATE UNIQUE INDEX "job_records_in_order" ON "job_records" ("jobId", "kind", "ordinal") `);
     await runner.query(`CREATE INDEX "jobs_by_customer" ON "jobs" ("customerId") `);
     await runner.query(`CREATE INDEX "jobs_by_machine" ON "jobs" ("machineId") `);
-    await runner.query(`CREATE INDEX "jobs_by_promise" ON "jobs" ("state", "promisedOn") `);
-    await runner.query(`CREATE INDEX "jobs_by_state_step" ON "jobs" ("state", "step") `);
+    await runner.query(`CREATE INDEX "jobs_by_number" ON "jobs" ("state", "number") `);
+    await runner.query(`CREATE INDEX "jobs_by_promise" ON "jobs" ("state", "promisedOn", "id") `);
+    await runner.query(`CREATE INDEX "jobs_by_receipt" ON "jobs" ("state", "receivedAt", "id") `);
+    await runner.query(`CREATE INDEX "jobs_by_state_step" ON "jobs" ("state", "step", "id") `);
     await runner.query(`CREATE INDEX "machines_by_customer" ON "machines" ("customerId") `);
     await runner.query(`CREATE INDEX "machines_by_serial" ON "machines" ("serial") `);
     await runner.query(`CREATE UNIQUE INDEX "one_invoice_a_quote" ON "invoices" ("quoteId") `);
