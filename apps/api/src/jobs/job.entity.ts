@@ -6,7 +6,7 @@ import type { JobState, Route, Step } from '@shared/route';
 
 /** A visit of one machine. */
 @Entity('jobs')
-@Index('jobs_by_state_step', ['state', 'step'])
+@Index('jobs_by_state_step', ['state', 'step', 'id'])
 @Index('jobs_by_promise', ['state', 'promisedOn', 'id'])
 @Index('jobs_by_number', ['state', 'number'])
 @Index('jobs_by_receipt', ['state', 'receivedAt', 'id'])
