@@ -35,7 +35,7 @@ export async function build({ always = false } = {}) {
   writeFileSync(stamp, '');
 }
 
-if (import.meta.url === pathToFileURL(process.argv[1]).href) {
+if (process.argv[1] && import.meta.url === pathToFileURL(process.argv[1]).href) {
   await installPackages();
   await build({ always: true });
 }
