@@ -1,8 +1,9 @@
-import type { Control, FieldPath, FieldValues } from 'react-hook-form';
+import { get, useFormState, type Control, type FieldPath, type FieldValues } from 'react-hook-form';
 import { CONNECTION_OPTIONS, KIND_OPTIONS } from '../lib/machine-words.js';
 import { defineText } from '../lib/text.js';
 import { CheckField, SelectField, TextField } from './fields.js';
 import { QuantityField } from './quantity-field.js';
+import './nameplate-fields.css';
 
 const t = defineText({
   description: 'What it is',
@@ -44,6 +45,8 @@ interface NameplateFieldsProps<F extends FieldValues> {
 /** The nameplate by the fields of the standards; what cannot be read stays empty. */
 export function NameplateFields<F extends FieldValues>({ control, at, folded = false }: NameplateFieldsProps<F>) {
   const name = (field: string) => `${at}nameplate.${field}` as FieldPath<F>;
+  const { errors } = useFormState({ control });
+  const wrongBelow = REST.some((field) => get(errors, name(field)) !== undefined);
   const text = (field: TextName) => <TextField control={control} name={name(field)} label={t(field)} optional />;
   const rest = (
     <div className="fields">
@@ -77,7 +80,7 @@ export function NameplateFields<F extends FieldValues>({ control, at, folded = f
       </div>
       <CheckField control={control} name={name('explosiveAtmosphere')} label={t('explosiveAtmosphere')} help={t('explosiveHelp')} />
       {folded ? (
-        <details className="lb-fold">
+        <details className="lb-fold" open={wrongBelow || undefined}>
           <summary>{t('more')}</summary>
           {rest}
         </details>
@@ -87,5 +90,8 @@ export function NameplateFields<F extends FieldValues>({ control, at, folded = f
     </div>
   );
 }
+
+/** What a mistake must not hide in. */
+const REST = ['powerFactor', 'efficiencyPercent', 'model', 'frame', 'mounting', 'enclosure', 'ingressProtection', 'thermalClass', 'duty', 'bearingDriveEnd', 'bearingNonDriveEnd'];
 
 type TextName = 'maker' | 'model' | 'serial' | 'frame' | 'mounting' | 'enclosure' | 'ingressProtection' | 'thermalClass' | 'duty' | 'bearingDriveEnd' | 'bearingNonDriveEnd';

@@ -27,7 +27,7 @@ export const t = defineText({
   increase: 'Increase',
   notEstablished: 'not established',
   hotSpot: 'Hottest over mean',
-  limitOf: 'limit {limit}',
+  limit: 'limit',
   method: 'Method',
   partPeak: 'Part peak',
   noPartTemperature: 'not measured',
@@ -43,6 +43,7 @@ export const t = defineText({
   repaired: 'Done',
   missing: 'Missing',
   reasons: 'Why',
+  choose: 'Choose…',
   // waiver
   waiver: 'No core test before?',
   waiverWords: 'A manager may let the job go on without it. The increase is then not established, and every paper says so. A reading is never invented.',
@@ -159,3 +160,43 @@ export const t = defineText({
 
 const PAPERS: Record<string, string> = { acknowledgement: 'Receipt', tag: 'Tag', quote: 'Quote', invoice: 'Invoice', receipt: 'Payment receipt', certificate: 'Certificate', 'delivery-note': 'Delivery note' };
 export const paperName = (kind: string): string => PAPERS[kind] ?? kind;
+
+const TESTS: Record<string, string> = {
+  'insulation-resistance': 'Insulation resistance',
+  'insulation-new-winding': 'Insulation, new winding',
+  'polarization-index': 'Polarization index',
+  'winding-resistance-balance': 'Winding resistance, balance',
+  'winding-resistance-as-found': 'Winding resistance, as found',
+  'surge-difference': 'Surge comparison',
+  polarity: 'Polarity',
+  'high-potential': 'High potential',
+  'no-load-current-balance': 'No-load current, balance',
+  'no-load-current-level': 'No-load current, level',
+  vibration: 'Vibration',
+  direction: 'Direction',
+  'bearing-rise': 'Bearing temperature',
+  'core-loss': 'No-load core loss',
+};
+/** What the shop calls a test or a part of one. */
+export const testName = (test: string): string => TESTS[test] ?? test.replaceAll('-', ' ');
+
+const MATERIALS: Record<string, string> = {
+  organic: 'organic',
+  inorganic: 'inorganic',
+  unknown: 'unknown, counts as organic',
+  'cast-iron': 'cast iron',
+  steel: 'steel',
+  aluminium: 'aluminium',
+  'oven-burnout': 'burnout oven',
+  'warm-pull': 'pulled warm',
+  'cold-pull': 'pulled cold',
+  'water-jet': 'water jet',
+  chemical: 'chemical',
+  separate: 'sheets separated',
+  grind: 'ground',
+  etch: 'etched',
+  restack: 'restacked',
+  're-insulate': 're-insulated',
+  'new-laminations': 'new laminations',
+};
+export const plainWord = (word: string): string => MATERIALS[word] ?? word;
