@@ -1,4 +1,4 @@
-import { stripDrawing, type Drawing, type StripBar } from '@libs/drawings';
+import type { StripBar, StripDrawingInput } from '@libs/drawings';
 import { formatUsual, toShown, unitOf, type UnitSystem } from '@libs/quantities';
 import { countingBefore, coreResultOf, testsAfter, type CoreRecord } from './core-figures.js';
 import { defineText } from './text.js';
@@ -16,7 +16,7 @@ const t = defineText({
 export const signedPercent = (fraction: number): string => `${fraction < 0 ? '−' : '+'}${Math.abs(fraction * 100).toFixed(1)} %`;
 
 /** Before and after on one scale, in the reader's units, as the certificate will print it. */
-export function coreStrip(records: readonly CoreRecord[], units: UnitSystem): Drawing {
+export function coreStrip(records: readonly CoreRecord[], units: UnitSystem): StripDrawingInput {
   const shown = (wattsPerKg: number) => toShown(wattsPerKg, 'specific-loss', units);
   const figure = (wattsPerKg: number) => formatUsual(wattsPerKg, 'specific-loss', units, { unit: false });
   const before = countingBefore(records);
@@ -44,7 +44,7 @@ export function coreStrip(records: readonly CoreRecord[], units: UnitSystem): Dr
         ? { value: shown(absoluteLimit), words: t('limitAbsolute', { figure: figure(absoluteLimit) }) }
         : null;
   const comparison = last?.increaseEstablished ? last.comparison : undefined;
-  return stripDrawing({
+  return {
     before: validBefore ? bar(t('before'), validBefore) : null,
     after: afters.map((result, i) => bar(afters.length > 1 && i < afters.length - 1 ? t('afterNo', { n: i + 1 }) : t('after'), result)),
     limit,
@@ -54,5 +54,5 @@ export function coreStrip(records: readonly CoreRecord[], units: UnitSystem): Dr
         ? { figure: '', interval: t('notComparable') }
         : null,
     unit: unitOf('specific-loss', units),
-  });
+  };
 }

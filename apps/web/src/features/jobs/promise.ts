@@ -1,5 +1,4 @@
-/** Whole days from one calendar date to another; both yyyy-mm-dd. */
-export const daysBetween = (from: string, to: string): number => Math.round((Date.parse(`${to}T00:00:00Z`) - Date.parse(`${from}T00:00:00Z`)) / 86_400_000);
+import { daysBetween } from '../../lib/format.js';
 
 export type PromiseStanding = { readonly kind: 'none' } | { readonly kind: 'late'; readonly days: number } | { readonly kind: 'today' } | { readonly kind: 'ahead'; readonly days: number };
 

@@ -137,6 +137,7 @@ export const t = defineText({
   openPdf: 'Open PDF',
   printTag: 'Print tag',
   tagReady: 'The tag is ready.',
+  openTag: 'Open the tag as PDF',
   // delivery
   delivery: 'Delivery',
   deliveryWords: 'The machine goes out: write down who takes it. The delivery note is made at once.',

@@ -4,7 +4,6 @@ import { DataTable, type Column } from '../../../components/data-table.js';
 import { Empty } from '../../../components/faces.js';
 import { ErrorNotice } from '../../../components/notices.js';
 import { Panel } from '../../../components/panel.js';
-import { useTell } from '../../../components/toaster.js';
 import { momentOf } from '../../../lib/format.js';
 import { usePrintTag } from '../api/job-changes.js';
 import { paperName, t } from '../work-text.js';
@@ -30,17 +29,17 @@ const COLUMNS: Column<Paper>[] = [
 /** Every paper of the job, the replaced ones too, and the tag to print anew. */
 export function PapersPanel({ job }: { readonly job: JobSheet }) {
   const print = usePrintTag(job.id);
-  const tell = useTell();
-  const printTag = () =>
-    print.mutate(undefined, {
-      onSuccess: (tag) => {
-        tell(t('tagReady'));
-        window.open(`/api/papers/${tag.paperId}/pdf`, '_blank', 'noreferrer');
-      },
-    });
   return (
-    <Panel title={t('papers')} actions={<Button text={t('printTag')} loading={print.isPending} onClick={printTag} />}>
+    <Panel title={t('papers')} actions={<Button text={t('printTag')} loading={print.isPending} onClick={() => print.mutate()} />}>
       <ErrorNotice error={print.error} />
+      {print.data && (
+        <p role="status">
+          {t('tagReady')}{' '}
+          <a className="lb-number" href={`/api/papers/${print.data.paperId}/pdf`} target="_blank" rel="noreferrer">
+            {t('openTag')}
+          </a>
+        </p>
+      )}
       {job.papers.length === 0 ? <Empty title={t('noPapers')} /> : <DataTable caption={t('papers')} columns={COLUMNS} rows={[...job.papers].reverse()} rowKey={(p) => p.id} />}
     </Panel>
   );
