@@ -30,7 +30,7 @@ module.exports = {
     },
     { name: 'libs-are-pure', severity: 'error', from: { path: '^libs/', pathNot: '\\.spec\\.ts$' }, to: { path: '^node_modules/(@nestjs|react|typeorm|better-sqlite3|stripe|nodemailer)' } },
     { name: 'shared-is-the-contract', severity: 'error', from: { path: '^shared/' }, to: { path: '^(apps|mocks)/|node_modules/(@nestjs|react|typeorm)' } },
-    { name: 'web-not-api', severity: 'error', from: { path: '^apps/web' }, to: { path: '^(apps/api|mocks)/' } },
+    { name: 'web-not-api', severity: 'error', from: { path: '^apps/web/src/' }, to: { path: '^(apps/api|mocks)/' } },
     { name: 'api-not-web', severity: 'error', from: { path: '^apps/api' }, to: { path: '^apps/web/' } },
     { name: 'mocks-stay-outside', severity: 'error', from: { path: '^(apps/(api|web)/src|libs|shared)/', pathNot: '\\.spec\\.tsx?$' }, to: { path: '^mocks/' } },
     { name: 'web-components-know-no-feature', severity: 'error', from: { path: '^apps/web/src/(components|lib)/' }, to: { path: '^apps/web/src/(features|app)/' } },

@@ -1,7 +1,6 @@
 import { z } from 'zod';
 
 /** Pieces that messages are made of. */
-// eslint-disable-next-line no-control-regex
 const CONTROL = /[\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f]/;
 const tidy = (text: string) => !CONTROL.test(text);
 

@@ -9,16 +9,12 @@ import {
   type MachineTestEvaluation,
   type MachineTestProblem,
 } from '@libs/machine-tests';
-import type { Nameplate } from '@shared/machines';
 import { demandedFinalTestParts } from '@shared/machine-tests';
 import type { ReadingsOf, RecordInput } from '@shared/records';
 import { coreAfter, coreBefore } from '../jobs/core-standing.js';
 import type { JobFacts } from '../jobs/job-facts.js';
-import type { Evaluation, EvaluationContext } from './evaluate-record.js';
+import { NOTHING_FOLLOWS, refusedFor, type Evaluation, type EvaluationContext } from './evaluation.js';
 
-export interface MachineFacts {
-  readonly nameplate: Nameplate;
-}
 type MachineTestInput = Extract<RecordInput, { kind: 'incoming-test' | 'before-varnish-test' | 'final-test' }>;
 
 export function evaluateMachineTest(input: MachineTestInput, context: EvaluationContext): Evaluation {
@@ -57,7 +53,7 @@ function coreShownOnceMore(facts: JobFacts): Record<string, unknown> | null {
 }
 
 function conclude(problems: readonly MachineTestProblem[], evaluate: () => MachineTestEvaluation<unknown>): Evaluation {
-  if (problems.length > 0) return { problems: problems.map((p) => ({ ...p })), verdict: null, result: {}, calculation: 'none', wattsPerKg: null, increase: null };
+  if (problems.length > 0) return refusedFor(problems);
   const evaluation = evaluate();
-  return { problems: [], verdict: evaluation.verdict, result: { ...evaluation }, calculation: evaluation.calculation, wattsPerKg: null, increase: null };
+  return { ...NOTHING_FOLLOWS, verdict: evaluation.verdict, result: { ...evaluation }, calculation: evaluation.calculation };
 }

@@ -1,30 +1,10 @@
 import { coreTestProblems, evaluateCoreTest, type BeforeTest, type CoreTestInput, type CoreTestResult } from '@libs/core-loss';
-import type { FieldProblem } from '@shared/errors';
 import type { ReadingsOf, RecordInput } from '@shared/records';
 import { validBefore, waiverInForce } from '../jobs/core-standing.js';
 import { lastOf, type JobFacts } from '../jobs/job-facts.js';
 import { burnoutProblems, judgeStrip } from './burnout-limit.js';
-import { evaluateMachineTest, type MachineFacts } from './evaluate-machine-test.js';
-
-/** What follows from a record's readings: computed here, by the same libraries the screen uses, and only this is kept. */
-export interface Evaluation {
-  readonly problems: readonly FieldProblem[];
-  readonly verdict: string | null;
-  readonly result: Record<string, unknown>;
-  readonly calculation: string;
-  readonly wattsPerKg: number | null;
-  readonly increase: number | null;
-}
-
-export interface EvaluationContext {
-  readonly facts: JobFacts;
-  readonly machine: MachineFacts;
-  /** tags of instruments past their grace on the day */
-  readonly instrumentsPastGrace: readonly string[];
-}
-
-const PLAIN = { problems: [], verdict: null, result: {}, calculation: 'none', wattsPerKg: null, increase: null } as const;
-const refused = (problems: readonly FieldProblem[]): Evaluation => ({ ...PLAIN, problems });
+import { evaluateMachineTest } from './evaluate-machine-test.js';
+import { NOTHING_FOLLOWS as PLAIN, refusedFor as refused, type Evaluation, type EvaluationContext } from './evaluation.js';
 
 export function evaluateRecord(input: RecordInput, context: EvaluationContext): Evaluation {
   switch (input.kind) {
