@@ -1,7 +1,7 @@
 import type { CoreGeometry } from '@libs/core-loss';
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { faultsOf, outOfFrame, radiiOf, textsOf, wordsOf } from './drawn-extent.fixture.js';
+import { faultsOf, outOfFrame, radiiOf, textExtent, textsOf, wordsOf } from './drawn-extent.fixture.js';
 import { ringDrawing, type RingDrawingInput } from './ring-drawing.js';
 
 /** 400 by 260 mm, 36 slots 35 mm deep: an invented core. */
@@ -67,6 +67,17 @@ describe('ringDrawing', () => {
     const narrow = ring({ geometry: { ...stator, innerDiameterM: 0.06 } });
     expect(figure(narrow).anchor).toBe('end');
     expect(outOfFrame(narrow)).toEqual([]);
+  });
+
+  it('keeps the reading clear of the cable, in a wide bore and in a narrow one', () => {
+    for (const geometry of [stator, armature]) {
+      const drawing = ring({ geometry, turns: 24 });
+      const inside = Math.min(...cables(drawing).map((s) => (s.kind === 'path' ? radiiOf(s.d, centre)[0]! : 0)));
+      const lines = textsOf(drawing).filter((t) => t.x === centre.x && Math.abs(t.y - centre.y) < 50);
+      expect(lines).toHaveLength(3);
+      // the cable comes in at the lower right: the corner of the words that lies there is the one it could touch
+      for (const e of lines.map(textExtent)) expect(Math.hypot(e.right - centre.x, Math.max(0, e.bottom - centre.y))).toBeLessThan(inside);
+    }
   });
 
   it('keeps all words inside the frame', () => {

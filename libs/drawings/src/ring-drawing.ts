@@ -77,8 +77,8 @@ function unknownCore(title: string, words: string): Drawing {
     description: words,
     shapes: [
       { kind: 'path', d: circlePath(CENTRE, OUTER), stroke: 'line', strokeWidth: 1.2, dash: [5, 5] },
-      { kind: 'path', d: circlePath(CENTRE, OUTER * 0.62), stroke: 'line', strokeWidth: 1.2, dash: [5, 5] },
-      ...wrapped(words, 24).map((text, i, all): Shape => ({ kind: 'text', x: CENTRE.x, y: CENTRE.y + 4 + (i - (all.length - 1) / 2) * 15, text, size: 11, weight: 400, anchor: 'middle', ink: 'muted' })),
+      { kind: 'path', d: circlePath(CENTRE, OUTER * 0.66), stroke: 'line', strokeWidth: 1.2, dash: [5, 5] },
+      ...wrapped(words, 22).map((text, i, all): Shape => ({ kind: 'text', x: CENTRE.x, y: CENTRE.y + 4 + (i - (all.length - 1) / 2) * 15, text, size: 10.5, weight: 400, anchor: 'middle', ink: 'muted' })),
     ],
   };
 }
@@ -156,7 +156,8 @@ function cable(r: Radii, turns: number): Shape[] {
   const drawn = Math.min(Math.round(turns), MOST_CABLES);
   const spread = Math.min((78 * Math.PI) / 180, (drawn - 1) * ((5.6 * Math.PI) / 180));
   const width = drawn > 12 ? 2.6 : 4.6;
-  const inside = Math.max(4, Math.min(r.inner, r.slotMouth) - 9);
+  // in a narrow bore the turns leave room for the reading
+  const inside = Math.max(4, Math.min(r.inner, r.slotMouth) - (r.inner < 60 ? 4 : 9));
   return Array.from({ length: drawn }, (_, i): Shape => {
     const angle = CABLE_AT + (drawn === 1 ? 0 : (i / (drawn - 1) - 0.5) * spread);
     return { kind: 'path', d: `${moveTo(polar(CENTRE, inside, angle))}${lineTo(polar(CENTRE, r.outer + 9, angle))}`, stroke: 'copper', strokeWidth: width, cap: 'round' };
@@ -167,14 +168,14 @@ function cable(r: Radii, turns: number): Shape[] {
 function middle(r: Radii, { reading }: RingDrawingInput): Shape[] {
   if (!reading) return [];
   const fits = r.inner >= 44;
-  const at = fits ? { x: CENTRE.x, y: CENTRE.y - 4 } : { x: SIZE.width - 6, y: 22 };
+  const at = fits ? { x: CENTRE.x, y: CENTRE.y - (r.inner < 60 ? 6 : 4) } : { x: SIZE.width - 6, y: 22 };
   const anchor = fits ? ('middle' as const) : ('end' as const);
   const size = fits ? Math.min(30, r.inner * 0.42) : 22;
   const lines: Shape[] = [
     { kind: 'text', x: at.x, y: at.y, text: reading.figure, size, weight: 600, anchor, ink: 'steel' },
     { kind: 'text', x: at.x, y: at.y + size * 0.55 + 2, text: reading.unit, size: 11, weight: 400, anchor, ink: 'muted' },
   ];
-  if (reading.below !== undefined) lines.push({ kind: 'text', x: at.x, y: at.y + size * 0.55 + 17, text: reading.below, size: 10.5, weight: 400, anchor, ink: 'muted' });
+  if (reading.below !== undefined) lines.push({ kind: 'text', x: at.x, y: at.y + size * 0.55 + (r.inner < 60 ? 13 : 17), text: reading.below, size: r.inner < 60 ? 8.5 : 10.5, weight: 400, anchor, ink: 'muted' });
   return lines;
 }
 

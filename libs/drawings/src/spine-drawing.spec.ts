@@ -50,7 +50,14 @@ describe('spineDrawing', () => {
     const places = spinePlaces(route);
     expect(places.map((p) => p.id)).toEqual(route.map((s) => s.id));
     for (const rect of rects(full())) expect(places.find((p) => p.id === rect.mark)).toMatchObject({ y: rect.y, height: rect.height });
-    expect(places.at(-1)!.y + places.at(-1)!.height).toBe(full().height);
+  });
+
+  it('leaves room for the line around the first and the last sheet', () => {
+    const outlined = full(route.map((s) => ({ ...s, state: 'to-come' as const })));
+    for (const rect of rects(outlined)) {
+      expect(rect.y).toBeGreaterThanOrEqual(rect.strokeWidth! / 2);
+      expect(rect.y + rect.height + rect.strokeWidth! / 2).toBeLessThanOrEqual(outlined.height);
+    }
   });
 
   it('draws the small one without words and with the same sheets', () => {

@@ -16,7 +16,7 @@ export interface SpineDrawingInput {
   readonly title?: string;
 }
 
-const FULL = { width: 260, sheet: 20, openSheet: 32, gap: 7, left: 8, sheetWidth: 56, openWidth: 72 } as const;
+const FULL = { width: 260, sheet: 20, openSheet: 32, gap: 7, left: 8, sheetWidth: 56, openWidth: 72, edge: 1 } as const;
 const MINI = { sheet: 6, openSheet: 7, gap: 2, height: 18 } as const;
 
 /** Where each sheet of a full spine lies, so that a screen can lay its links over them. */
@@ -27,7 +27,7 @@ export interface SheetPlace {
 }
 
 export function spinePlaces(sheets: readonly SpineSheet[]): SheetPlace[] {
-  let y = 0;
+  let y: number = FULL.edge;
   return sheets.map((sheet) => {
     const height = sheet.state === 'open' ? FULL.openSheet : FULL.sheet;
     const place = { id: sheet.id, y, height };
@@ -77,7 +77,7 @@ function full(sheets: readonly SpineSheet[]): Pick<Drawing, 'width' | 'height' |
     shapes.push(...notch(sheet.gate, y));
   });
   const last = places.at(-1);
-  return { width: FULL.width, height: last ? last.y + last.height : 0, shapes };
+  return { width: FULL.width, height: last ? last.y + last.height + FULL.edge : 0, shapes };
 }
 
 const skippedSheet = (x: number, y: number, width: number, mark?: string): Shape => ({

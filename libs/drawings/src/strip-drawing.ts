@@ -38,7 +38,7 @@ interface Layout {
   readonly wordsX: number;
 }
 const WIDE: Layout = { width: 560, left: 84, right: 396, row: 42, bar: 21, words: 5, wordsAnchor: 'start', wordsX: 410 };
-const NARROW: Layout = { width: 340, left: 1, right: 330, row: 54, bar: 34, words: -17, wordsAnchor: 'end', wordsX: 296 };
+const NARROW: Layout = { width: 340, left: 1, right: 330, row: 58, bar: 38, words: -19, wordsAnchor: 'end', wordsX: 296 };
 const TOP = 12;
 
 /**
