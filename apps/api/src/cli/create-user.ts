@@ -48,8 +48,8 @@ function readPassword(): Promise<string> {
       Object.assign(asked, { _writeToOutput: () => undefined });
     }
     asked.once('line', (line) => {
-      asked.close();
       done(line);
+      asked.close();
     });
     asked.once('close', () => done(''));
   });
