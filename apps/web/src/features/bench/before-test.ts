@@ -1,18 +1,14 @@
 import type { BeforeTest, CoreTestResult } from '@libs/core-loss';
 import type { JobSheet } from '@shared/jobs';
 import type { RecordView } from '@shared/records';
-import { readingsOf, recordsOfKind } from '../../lib/job-records.js';
+import { countingBefore } from '../../lib/core-figures.js';
+import { readingsOf } from '../../lib/job-records.js';
 import { coreTestInput } from './bench-form.js';
 
-/**
- * The before test that counts: the last one that is not “not valid” and was made before the strip. Identifiers sort by
- * time, so the younger record has the larger one. The server chooses by the same rule.
- */
+/** The before test that an after test is held against; one that is “not valid” is none. The server chooses by the same rule. */
 export function beforeRecord(records: readonly RecordView[]): RecordView | undefined {
-  const strip = recordsOfKind(records, 'strip')[0];
-  return recordsOfKind(records, 'core-test-before')
-    .filter((r) => r.verdict !== 'not-valid' && !(strip && r.id > strip.id))
-    .at(-1);
+  const before = countingBefore(records);
+  return before?.verdict === 'not-valid' ? undefined : before;
 }
 
 /** A waiver counts once a manager has countersigned it; the countersignature bears the hash of what it signs. */

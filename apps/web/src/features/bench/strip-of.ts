@@ -1,16 +1,16 @@
 import type { StripBar, StripDrawingInput } from '@libs/drawings';
 import type { CoreTestResult } from '@libs/core-loss';
 import { formatUsual, toShown, unitOf, type UnitSystem } from '@libs/quantities';
+import { signedPercent } from '../../lib/core-strip.js';
 import { t } from './text.js';
 
-const signed = (fraction: number) => `${fraction >= 0 ? '+' : '−'}${Math.abs(fraction * 100).toFixed(1)} %`;
 
 export function increaseWords(result: Pick<CoreTestResult, 'comparison'>): { figure: string; interval: string } | null {
   const { comparison } = result;
   if (!comparison) return null;
   return {
-    figure: signed(comparison.increase),
-    interval: t('interval', { points: (comparison.expandedUncertainty * 100).toFixed(1), low: signed(comparison.low), high: signed(comparison.high) }),
+    figure: signedPercent(comparison.increase),
+    interval: t('interval', { points: (comparison.expandedUncertainty * 100).toFixed(1), low: signedPercent(comparison.low), high: signedPercent(comparison.high) }),
   };
 }
 

@@ -12,6 +12,7 @@ export const t = defineText({
   before: 'before',
   after: 'after',
   afterNo: 'after {n}',
+  notValidNo: 'not valid {n}',
   limitWords: 'before + {percent} %',
   interval: '± {points} points (k = 2): {low} to {high}',
   stripTitle: 'Core loss before and after',

@@ -42,7 +42,7 @@ export function KeptTest({ job, phase, record, records, limits, differs }: { rea
   });
   const strip = stripOf({
     before: before ? resultOf(before) : null,
-    after: tests.map((r) => ({ label: tests.length > 1 ? t('afterNo', { n: r.ordinal }) : t('after'), result: resultOf(r) })),
+    after: tests.map((r) => ({ label: r.verdict === 'not-valid' ? t('notValidNo', { n: r.ordinal }) : tests.length > 1 ? t('afterNo', { n: r.ordinal }) : t('after'), result: resultOf(r) })),
     increaseLimit: limits.core.increaseLimit,
     system,
   });
