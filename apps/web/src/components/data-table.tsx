@@ -4,7 +4,7 @@ import { useSearchParams } from 'react-router-dom';
 import { defineText } from '../lib/text.js';
 import './data-table.css';
 
-const t = defineText({ previous: 'Previous', next: 'Next', range: '{from} to {to} of {total}', sortBy: 'Sort by {column}' });
+const t = defineText({ previous: 'Previous', next: 'Next', range: '{from} to {to} of {total}', sortBy: 'Sort by {column}', pages: 'Pages of the list' });
 
 export interface Column<Row> {
   readonly key: string;
@@ -23,10 +23,12 @@ interface DataTableProps<Row> {
   readonly total?: number;
   readonly page?: number;
   readonly size?: number;
+  /** the order the list has while the address names none */
+  readonly sortedBy?: { readonly sort: string; readonly order: 'asc' | 'desc' };
 }
 
 /** A list that the server sorts and pages; its state stands in the address. */
-export function DataTable<Row>({ caption, columns, rows, rowKey, total, page = 1, size = 50 }: DataTableProps<Row>) {
+export function DataTable<Row>({ caption, columns, rows, rowKey, total, page = 1, size = 50, sortedBy }: DataTableProps<Row>) {
   const [params, setParams] = useSearchParams();
   const set = (changes: Record<string, string>) =>
     setParams((old) => {
@@ -34,16 +36,17 @@ export function DataTable<Row>({ caption, columns, rows, rowKey, total, page = 1
       for (const [key, value] of Object.entries(changes)) next.set(key, value);
       return next;
     });
-  const sorted = params.get('sort');
-  const descending = params.get('order') === 'desc';
+  const sorted = params.get('sort') ?? sortedBy?.sort;
+  const descending = (params.get('order') ?? sortedBy?.order) === 'desc';
+  // on a phone the rows become cards by style, and style takes the table's meaning away: the roles keep it
   return (
     <div className="lb-table-wrap">
-      <table className="lb-table">
+      <table className="lb-table" role="table">
         <caption className="visually-hidden">{caption}</caption>
-        <thead>
-          <tr>
+        <thead role="rowgroup">
+          <tr role="row">
             {columns.map((c) => (
-              <th key={c.key} scope="col" className={c.number ? 'number' : ''} aria-sort={c.sort && sorted === c.sort ? (descending ? 'descending' : 'ascending') : undefined}>
+              <th key={c.key} scope="col" role="columnheader" className={c.number ? 'number' : ''} aria-sort={c.sort && sorted === c.sort ? (descending ? 'descending' : 'ascending') : undefined}>
                 {c.sort ? (
                   <button type="button" aria-label={t('sortBy', { column: c.title })} onClick={() => set({ sort: c.sort!, order: sorted === c.sort && !descending ? 'desc' : 'asc', page: '1' })}>
                     {c.title}
@@ -56,11 +59,11 @@ export function DataTable<Row>({ caption, columns, rows, rowKey, total, page = 1
             ))}
           </tr>
         </thead>
-        <tbody>
+        <tbody role="rowgroup">
           {rows.map((row) => (
-            <tr key={rowKey(row)}>
+            <tr key={rowKey(row)} role="row">
               {columns.map((c) => (
-                <td key={c.key} data-title={c.title} className={c.number ? 'number num' : ''}>
+                <td key={c.key} role="cell" data-title={c.title} className={c.number ? 'number num' : ''}>
                   {c.cell(row)}
                 </td>
               ))}
@@ -69,13 +72,13 @@ export function DataTable<Row>({ caption, columns, rows, rowKey, total, page = 1
         </tbody>
       </table>
       {total !== undefined && total > size && (
-        <div className="row spread lb-pager">
+        <nav className="row spread lb-pager" aria-label={t('pages')}>
           <span className="muted num">{t('range', { from: (page - 1) * size + 1, to: Math.min(page * size, total), total })}</span>
           <div className="row">
             <Button text={t('previous')} disabled={page <= 1} onClick={() => set({ page: String(page - 1) })} />
             <Button text={t('next')} disabled={page * size >= total} onClick={() => set({ page: String(page + 1) })} />
           </div>
-        </div>
+        </nav>
       )}
     </div>
   );

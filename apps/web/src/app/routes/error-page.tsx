@@ -1,31 +1,40 @@
 import { Button } from '@blueprintjs/core';
 import { isRouteErrorResponse, Link, useRouteError } from 'react-router-dom';
-import { ApiError } from '../../lib/http.js';
 import { Empty } from '../../components/faces.js';
+import { PageHeader } from '../../components/panel.js';
+import { ApiError } from '../../lib/http.js';
 import { t } from '../shell/text.js';
 
-/** A page that is not there, or that failed while it was shown. */
+const statusOf = (error: unknown): number => (isRouteErrorResponse(error) || error instanceof ApiError || error instanceof Response ? error.status : 500);
+
+/** A page that failed while it was loaded or shown: what happened, and the way on. */
 export function ErrorPage() {
   const error = useRouteError();
-  const missing = (isRouteErrorResponse(error) && error.status === 404) || (error instanceof ApiError && error.status === 404);
-  if (missing) {
-    return (
-      <Empty title={t('notFound')}>
-        <p>{t('notFoundWords')}</p>
-        <p>
-          <Link to="/">{t('home')}</Link>
-        </p>
-      </Empty>
-    );
-  }
+  const status = statusOf(error);
+  if (status === 404) return <NotFoundPage />;
+  if (status === 403) return <Dead title={t('forbidden')} words={t('forbiddenWords')} />;
   return (
-    <Empty title={t('failed')}>
-      <p>{error instanceof ApiError ? error.message : t('failedWords')}</p>
-      <Button text={t('reload')} onClick={() => window.location.reload()} />
-    </Empty>
+    <>
+      <PageHeader title={t('failed')} />
+      <Empty title={error instanceof ApiError ? error.message : t('failedWords')}>
+        {error instanceof ApiError && error.requestId !== '' && <p>{t('requestNumber', { id: error.requestId })}</p>}
+        <Button intent="primary" text={t('reload')} onClick={() => window.location.reload()} />
+      </Empty>
+    </>
   );
 }
 
-export function NotFoundPage(): never {
-  throw new Response('', { status: 404 });
+export function NotFoundPage() {
+  return <Dead title={t('notFound')} words={t('notFoundWords')} />;
+}
+
+function Dead({ title, words }: { readonly title: string; readonly words: string }) {
+  return (
+    <>
+      <PageHeader title={title} />
+      <Empty title={words}>
+        <Link to="/">{t('home')}</Link>
+      </Empty>
+    </>
+  );
 }

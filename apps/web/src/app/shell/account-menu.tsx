@@ -3,6 +3,7 @@ import { CaretDown } from '@blueprintjs/icons';
 import type { Preferences } from '@shared/session';
 import { useNavigate } from 'react-router-dom';
 import { useMe, useSetPreferences, useSignOut } from '../../lib/me.js';
+import { setSingleKeys, useSingleKeys } from './single-keys.js';
 import { t } from './text.js';
 
 const THEMES: readonly [Preferences['theme'], 'system' | 'light' | 'dark'][] = [
@@ -17,6 +18,7 @@ export function AccountMenu() {
   const set = useSetPreferences();
   const signOut = useSignOut();
   const navigate = useNavigate();
+  const singleKeys = useSingleKeys();
   const { preferences } = me;
   const menu = (
     <Menu aria-label={t('account', { name: me.name })}>
@@ -27,6 +29,12 @@ export function AccountMenu() {
       {THEMES.map(([theme, key]) => (
         <MenuItem key={theme} roleStructure="listoption" selected={preferences.theme === theme} text={t(key)} onClick={() => set.mutate({ ...preferences, theme })} />
       ))}
+      {!me.roles.includes('customer') && (
+        <>
+          <MenuDivider title={t('keys')} />
+          <MenuItem roleStructure="listoption" selected={singleKeys} text={t('slash')} shouldDismissPopover={false} onClick={() => setSingleKeys(!singleKeys)} />
+        </>
+      )}
       <MenuDivider />
       {me.shop.mailboxUrl && <MenuItem text={t('mailbox')} href={me.shop.mailboxUrl} target="_blank" rel="noreferrer" />}
       <MenuItem text={t('signOut')} onClick={() => signOut.mutate(undefined, { onSettled: () => void navigate('/sign-in') })} />

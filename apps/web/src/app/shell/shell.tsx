@@ -1,20 +1,38 @@
-import { NavLink, Outlet, ScrollRestoration } from 'react-router-dom';
+import { useEffect, useRef } from 'react';
+import { NavLink, Outlet, ScrollRestoration, useLocation } from 'react-router-dom';
 import { Mark } from '../../components/mark.js';
 import { UnitsProvider } from '../../components/units.js';
 import { useMe } from '../../lib/me.js';
 import { AccountMenu } from './account-menu.js';
+import { ConnectionBanner } from './connection-banner.js';
 import { homeOf, roomsOf } from './rooms.js';
+import { isTyping } from './scanner.js';
 import { SearchBox } from './search-box.js';
 import { SignInAgain } from './sign-in-again.js';
 import { t } from './text.js';
 import { useTheme } from './theme.js';
 import './shell.css';
 
+/** A new page begins where it begins for the eye too: the focus goes to its content, unless the page has put it into a field. */
+function useFocusOnNewPage() {
+  const content = useRef<HTMLElement>(null);
+  const { pathname } = useLocation();
+  const seen = useRef(pathname);
+  useEffect(() => {
+    if (seen.current === pathname) return;
+    seen.current = pathname;
+    if (isTyping(document.activeElement) && content.current?.contains(document.activeElement)) return;
+    content.current?.focus({ preventScroll: true });
+  }, [pathname]);
+  return content;
+}
+
 /** Header with the rooms, and the open page below it. */
 export function Shell() {
   const me = useMe();
   const customer = me.roles.includes('customer');
   useTheme(me.preferences.theme);
+  const content = useFocusOnNewPage();
   return (
     <UnitsProvider value={me.preferences.units}>
       <div className={`lb-shell${customer ? ' lb-shell-portal' : ''}`}>
@@ -38,7 +56,8 @@ export function Shell() {
             <AccountMenu />
           </div>
         </header>
-        <main id="content" tabIndex={-1}>
+        <ConnectionBanner />
+        <main id="content" tabIndex={-1} ref={content}>
           <Outlet />
         </main>
         <SignInAgain />
