@@ -11,6 +11,8 @@ module.exports = {
     onlyInto('quantities', []),
     onlyInto('money', []),
     onlyInto('measurement', []),
+    onlyInto('control-charts', []),
+    onlyInto('logger-files', []),
     onlyInto('core-loss', ['libs/quantities', 'libs/measurement']),
     onlyInto('winding', ['libs/quantities', 'libs/measurement']),
     onlyInto('machine-tests', ['libs/quantities', 'libs/measurement']),

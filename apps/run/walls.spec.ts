@@ -13,6 +13,8 @@ const OFFENCES: readonly (readonly [rule: string, file: string, imports: string]
   ['quantities-imports-only-what-it-may', 'libs/quantities/src/bad.ts', '../../money/src/index.js'],
   ['money-imports-only-what-it-may', 'libs/money/src/bad.ts', '../../quantities/src/index.js'],
   ['measurement-imports-only-what-it-may', 'libs/measurement/src/bad.ts', '../../quantities/src/index.js'],
+  ['control-charts-imports-only-what-it-may', 'libs/control-charts/src/bad.ts', '../../quantities/src/index.js'],
+  ['logger-files-imports-only-what-it-may', 'libs/logger-files/src/bad.ts', '../../quantities/src/index.js'],
   ['core-loss-imports-only-what-it-may', 'libs/core-loss/src/bad.ts', '../../money/src/index.js'],
   ['winding-imports-only-what-it-may', 'libs/winding/src/bad.ts', '../../core-loss/src/index.js'],
   ['machine-tests-imports-only-what-it-may', 'libs/machine-tests/src/bad.ts', '../../../shared/src/roles.js'],
