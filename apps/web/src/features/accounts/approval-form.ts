@@ -1,6 +1,7 @@
 import { parseMoney } from '@libs/money';
 import type { ApproveForCustomer } from '@shared/quotes';
 import type { FormProblem } from '../../lib/typed.js';
+import { t } from './text.js';
 
 export interface ApprovalForm {
   how: ApproveForCustomer['how'];
@@ -20,14 +21,14 @@ export const emptyApproval = (now: Date): ApprovalForm => ({ how: 'phone', appro
 export function readApproval(form: ApprovalForm, version: number, currency: string): { readonly candidate: unknown; readonly problems: FormProblem[] } {
   const problems: FormProblem[] = [];
   const at = new Date(form.approvedAt);
-  if (Number.isNaN(at.getTime())) problems.push({ path: 'approvedAt', message: 'Give the day and the time.' });
+  if (Number.isNaN(at.getTime())) problems.push({ path: 'approvedAt', message: t('needMoment') });
   let notToExceedMinor: number | null = null;
   if (form.notToExceedMinor.trim() !== '') {
     const money = parseMoney(form.notToExceedMinor, currency);
     if (money.ok) notToExceedMinor = money.amountMinor;
     else problems.push({ path: 'notToExceedMinor', message: money.words });
-  } else if (form.how === 'phone') problems.push({ path: 'notToExceedMinor', message: 'Ask how much it may cost at most, and write it down.' });
-  if (form.how === 'purchase-order' && form.purchaseOrder.trim() === '') problems.push({ path: 'purchaseOrder', message: 'Give the number of the purchase order.' });
+  } else if (form.how === 'phone') problems.push({ path: 'notToExceedMinor', message: t('needLimit') });
+  if (form.how === 'purchase-order' && form.purchaseOrder.trim() === '') problems.push({ path: 'purchaseOrder', message: t('needOrder') });
   const candidate = { version, how: form.how, approvedBy: form.approvedBy, approvedAt: Number.isNaN(at.getTime()) ? '' : at.toISOString(), purchaseOrder: form.purchaseOrder, notToExceedMinor };
   return { candidate, problems };
 }
