@@ -27,8 +27,13 @@ export function BenchField({ name, label, large = false }: { readonly name: Benc
     <div className={`lb-bench-field${large ? ' large' : ''}`}>
       <div className="lb-bench-label">
         <label htmlFor={id}>{label}</label>
+        {unit && (
+          <span id={`${id}-unit`} className="unit">
+            {unit}
+          </span>
+        )}
         {earlier && (
-          <span id={`${id}-before`} className="num">
+          <span id={`${id}-before`} className="lb-bench-earlier num">
             {t('beforeFigure', { figure: earlier })}
           </span>
         )}
@@ -50,15 +55,12 @@ export function BenchField({ name, label, large = false }: { readonly name: Benc
           setFocused(false);
           field.onBlur();
         }}
-        rightElement={unit ? <span className="lb-quantity-unit">{unit}</span> : undefined}
         aria-invalid={said !== undefined}
-        aria-describedby={[said ? `${id}-said` : '', earlier ? `${id}-before` : ''].filter(Boolean).join(' ') || undefined}
+        aria-describedby={[unit ? `${id}-unit` : '', said ? `${id}-said` : '', earlier ? `${id}-before` : ''].filter(Boolean).join(' ') || undefined}
       />
-      {said && (
-        <p id={`${id}-said`} className="lb-problem">
-          {said}
-        </p>
-      )}
+      <p id={`${id}-said`} className="lb-problem">
+        {said}
+      </p>
     </div>
   );
 }

@@ -1,6 +1,6 @@
 import type { BeforeTest, CoreLimits } from '@libs/core-loss';
-import { stripDrawing } from '@libs/drawings';
-import { Drawing } from '../../../components/drawing.js';
+import { formatUsual } from '@libs/quantities';
+import { BeforeAfterStrip } from '../../../components/before-after-strip.js';
 import { useUnits } from '../../../components/units.js';
 import type { Phase } from '../bench-form.js';
 import type { LiveTest } from '../live-test.js';
@@ -28,19 +28,33 @@ export function BenchFoot({ live, phase, limits, before }: BenchFootProps) {
   return (
     <section className="lb-bench-foot" aria-label={t('result')}>
       <div className="lb-bench-strip">
-        <Drawing drawing={stripDrawing(strip)} />
+        <BeforeAfterStrip {...strip} withTable={false} />
       </div>
-      {result ? <ResultPanel result={result} /> : <NotYet live={live} />}
+      {result ? <ResultPanel result={result} /> : <NotYet live={live} limits={limits} />}
     </section>
   );
 }
 
-function NotYet({ live }: { readonly live: LiveTest }) {
+function NotYet({ live, limits }: { readonly live: LiveTest; readonly limits: CoreLimits }) {
+  const system = useUnits();
   return (
     <div className="lb-bench-result lb-bench-notyet">
       <h3>{t('notYet')}</h3>
       {live.missing > 0 && <p className="muted">{t('notYetWords', { missing: live.missing })}</p>}
-      {live.wrong.size > 0 && (
+      {live.wrong.size === 0 ? (
+        <ol>
+          <li>{t('stepSize')}</li>
+          <li>{t('stepTrial')}</li>
+          <li>{t('stepRead')}</li>
+          <li>
+            {t('stepStop', {
+              mean: formatUsual(limits.stopMeanC, 'temperature', system),
+              spot: formatUsual(limits.stopSpotC, 'temperature', system),
+              over: formatUsual(limits.stopSpotOverMeanK, 'temperature-difference', system),
+            })}
+          </li>
+        </ol>
+      ) : (
         <>
           <p>{t('notYetWrong')}</p>
           <ul>

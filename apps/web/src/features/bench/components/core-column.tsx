@@ -1,10 +1,9 @@
 import { deriveGeometry, geometryProblems } from '@libs/core-loss';
-import { ringDrawing } from '@libs/drawings';
 import { formatQuantity, formatUsual, unitOf } from '@libs/quantities';
 import { useFormContext } from 'react-hook-form';
-import { Drawing } from '../../../components/drawing.js';
 import { ChoiceField } from '../../../components/fields.js';
 import { Quantity } from '../../../components/quantity.js';
+import { Ring } from '../../../components/ring.js';
 import { useUnits } from '../../../components/units.js';
 import type { BenchFigure, BenchValues } from '../bench-form.js';
 import type { LiveTest } from '../live-test.js';
@@ -19,7 +18,7 @@ export function CoreColumn({ live }: { readonly live: LiveTest }) {
   const armature = live.readings.geometry.kind === 'armature';
   return (
     <section className="lb-bench-column" aria-label={t('core')}>
-      <Ring live={live} />
+      <LiveRing live={live} />
       <div className="lb-bench-sizes">
         {SIZES.map((size) => (
           <BenchField key={size} name={`geometry.${size}` satisfies BenchFigure} label={t(armature && size === 'innerDiameterM' ? 'innerArmature' : size)} />
@@ -41,24 +40,22 @@ export function CoreColumn({ live }: { readonly live: LiveTest }) {
   );
 }
 
-export function Ring({ live }: { readonly live: LiveTest }) {
+function LiveRing({ live }: { readonly live: LiveTest }) {
   const system = useUnits();
   const { result, flux, geometry } = live;
   const { excitingTurns } = live.readings.reading;
   const { hottestSlot, meanC, hottestC } = live.readings.temperatures;
   const turns = Number.isInteger(excitingTurns) && excitingTurns > 0 ? excitingTurns : 0;
-  const drawing = ringDrawing({
-    geometry,
-    turns,
-    units: system,
-    ...middleOf(live, system),
-    ...(turns > 0 && flux
-      ? { cableWords: turns === 1 ? t('oneTurn', { volts: voltsEach(live, system) }) : t('turnsWords', { turns, volts: voltsEach(live, system) }) }
-      : {}),
-    ...(hottestSlot === undefined ? {} : { hottestSlot }),
-    ...(hottestSlot !== undefined && meanC !== undefined && hottestC !== undefined ? { heat: new Map([[hottestSlot, hottestC - meanC]]), heatFullK: result?.hotSpotLimitK ?? 10 } : {}),
-  });
-  return <Drawing drawing={drawing} />;
+  return (
+    <Ring
+      geometry={geometry}
+      turns={turns}
+      {...middleOf(live, system)}
+      {...(turns > 0 && flux ? { cableWords: turns === 1 ? t('oneTurn', { volts: voltsEach(live, system) }) : t('turnsWords', { turns, volts: voltsEach(live, system) }) } : {})}
+      {...(hottestSlot === undefined ? {} : { hottestSlot })}
+      {...(hottestSlot !== undefined && meanC !== undefined && hottestC !== undefined ? { heat: new Map([[hottestSlot, hottestC - meanC]]), heatFullK: result?.hotSpotLimitK ?? 10 } : {})}
+    />
+  );
 }
 
 const voltsEach = ({ flux, readings }: LiveTest, system: 'si' | 'inch-pound') =>

@@ -1,12 +1,12 @@
 import { Button, Callout } from '@blueprintjs/core';
 import type { CoreTestResult } from '@libs/core-loss';
-import { ringDrawing, stripDrawing } from '@libs/drawings';
 import { formatUsual, unitOf } from '@libs/quantities';
 import type { JobSheet } from '@shared/jobs';
 import type { LimitsSet } from '@shared/limits';
 import type { RecordView } from '@shared/records';
 import { Link, useNavigate } from 'react-router-dom';
-import { Drawing } from '../../../components/drawing.js';
+import { BeforeAfterStrip } from '../../../components/before-after-strip.js';
+import { Ring } from '../../../components/ring.js';
 import { PageHeader, Panel } from '../../../components/panel.js';
 import { useUnits } from '../../../components/units.js';
 import { momentOf } from '../../../lib/format.js';
@@ -32,14 +32,6 @@ export function KeptTest({ job, phase, record, records, limits, differs }: { rea
   const before = phase === 'before' ? record : beforeRecord(records);
   const tests = phase === 'after' ? recordsOfKind(records, 'core-test-after') : [];
   const { hottestSlot, meanC, hottestC } = temperatures;
-  const ring = ringDrawing({
-    geometry,
-    turns: reading.excitingTurns,
-    units: system,
-    reading: { figure: formatUsual(result.wattsPerKgReferred, 'specific-loss', system, { unit: false }), unit: unitOf('specific-loss', system), below: t('share', { flux: formatUsual(result.fluxDensityT, 'flux-density', system), share: formatUsual(result.fluxShareOfTarget, 'percent', system) }) },
-    ...(hottestSlot === undefined ? {} : { hottestSlot }),
-    ...(hottestSlot !== undefined && meanC !== undefined && hottestC !== undefined ? { heat: new Map([[hottestSlot, hottestC - meanC]]), heatFullK: result.hotSpotLimitK ?? 10 } : {}),
-  });
   const strip = stripOf({
     before: before ? resultOf(before) : null,
     after: tests.map((r) => ({ label: r.verdict === 'not-valid' ? t('notValidNo', { n: r.ordinal }) : tests.length > 1 ? t('afterNo', { n: r.ordinal }) : t('after'), result: resultOf(r) })),
@@ -64,14 +56,25 @@ export function KeptTest({ job, phase, record, records, limits, differs }: { rea
       <div className="lb-kept">
         <SpineRail job={job} />
         <Panel>
-          <Drawing drawing={ring} />
+          <Ring
+            interactive
+            geometry={geometry}
+            turns={reading.excitingTurns}
+            reading={{
+              figure: formatUsual(result.wattsPerKgReferred, 'specific-loss', system, { unit: false }),
+              unit: unitOf('specific-loss', system),
+              below: t('share', { flux: formatUsual(result.fluxDensityT, 'flux-density', system), share: formatUsual(result.fluxShareOfTarget, 'percent', system) }),
+            }}
+            {...(hottestSlot === undefined ? {} : { hottestSlot })}
+            {...(hottestSlot !== undefined && meanC !== undefined && hottestC !== undefined ? { heat: new Map([[hottestSlot, hottestC - meanC]]), heatFullK: result.hotSpotLimitK ?? 10 } : {})}
+          />
         </Panel>
         <Panel>
           <ResultPanel result={result} />
         </Panel>
       </div>
       <Panel>
-        <Drawing drawing={stripDrawing(strip)} width={720} />
+        <BeforeAfterStrip {...strip} />
       </Panel>
       <div className="row">
         <Link className="lb-bench-big lb-bench-link" to={`/jobs/${job.id}`}>

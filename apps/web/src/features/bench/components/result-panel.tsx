@@ -76,9 +76,10 @@ function JudgedRow({ judgement, result }: { readonly judgement: Judgement; reado
   const own = judgement.test === 'increase' && judgement.verdict === 'not-valid' && result.comparison ? [] : reasons;
   return (
     <li>
-      <span className="lb-judged-name">{t(judgement.test)}</span>
+      <span className="lb-judged-name">
+        {t(judgement.test)} <small className="muted num">{limit === undefined ? '' : t('limit', { limit: inUnit(limit, judgement, system) })}</small>
+      </span>
       <b className="num">{measured === undefined ? '–' : figureOf(judgement, measured, result, system)}</b>
-      <span className="muted num">{limit === undefined ? '' : t('limit', { limit: inUnit(limit, judgement, system) })}</span>
       <VerdictTag verdict={judgement.verdict} />
       {own.length > 0 && judgement.verdict !== 'conforms' && <span className="lb-judged-why muted">{own.map((r) => r.words).join(' ')}</span>}
     </li>

@@ -41,27 +41,24 @@ export function SetupColumn({ live, bay, before, minimumTargetT }: SetupColumnPr
   return (
     <section className="lb-bench-column" aria-labelledby="bench-setup">
       <h2 id="bench-setup">{t('setup')}</h2>
-      <Checks />
-      <div className="lb-bench-fields">
+      <div className="lb-bench-fields four">
         <BenchField name="target.fluxDensityT" label={t('target')} />
         <BenchField name="reading.frequencyHz" label={t('frequencyHz')} />
-        <SelectField
-          control={control}
-          name="target.basis"
-          label={t('targetBasis')}
-          wide
-          options={[
-            { value: 'standard', label: t('standard') },
-            { value: 'winding', label: t('winding') },
-            { value: 'supply', label: t('supply') },
-          ]}
-        />
-      </div>
-      <SetupList live={live} bay={bay} before={before} minimumTargetT={minimumTargetT} />
-      <div className="lb-bench-fields">
         <BenchField name="reading.excitingTurns" label={t('excitingTurns')} />
         <BenchField name="reading.searchTurns" label={t('searchTurns')} />
       </div>
+      <SetupList live={live} bay={bay} before={before} minimumTargetT={minimumTargetT} />
+      <Checks />
+      <SelectField
+        control={control}
+        name="target.basis"
+        label={t('targetBasis')}
+        options={[
+          { value: 'standard', label: t('standard') },
+          { value: 'winding', label: t('winding') },
+          { value: 'supply', label: t('supply') },
+        ]}
+      />
       <ChoiceField
         control={control}
         name="frame.state"

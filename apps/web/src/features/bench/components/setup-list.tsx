@@ -1,6 +1,8 @@
+import { Button } from '@blueprintjs/core';
 import { planSetups, setupObstacles, geometryProblems, type CoreTestResult, type Reason, type SetupOption, type SetupRequest } from '@libs/core-loss';
 import { OutOfRangeError, formatUsual, formatQuantity } from '@libs/quantities';
 import type { BayView } from '@shared/instruments';
+import { useState } from 'react';
 import { useFormContext, useWatch } from 'react-hook-form';
 import { useUnits } from '../../../components/units.js';
 import { typedFrom } from '../../../lib/typed.js';
@@ -45,6 +47,7 @@ export function SetupList(props: SetupListProps) {
   const system = useUnits();
   const turns = props.live.readings.reading.excitingTurns;
   const supplyId = useWatch({ control, name: 'setup.supplyId' });
+  const [all, setAll] = useState(false);
   const plan = planFor(props);
   if (!plan) return <p className="lb-bench-hint">{t('setupsWait')}</p>;
   if (plan.options.length === 0) {
@@ -67,12 +70,28 @@ export function SetupList(props: SetupListProps) {
       setValue('target.basis', 'supply', put);
     }
   };
+  const isChosen = (option: SetupOption) => option.turns === turns && option.supplyId === supplyId;
+  const chosen = plan.options.find(isChosen);
+  const shown = all || !chosen ? plan.options : [chosen];
   return (
-    <div role="radiogroup" aria-label={t('setups')} className="lb-setups">
-      {plan.options.map((option, i) => (
-        <Option key={`${option.supplyId}-${option.turns}-${option.volts}`} option={option} best={i === 0} chosen={option.turns === turns && option.supplyId === supplyId} bay={props.bay} onChoose={() => choose(option)} />
-      ))}
-    </div>
+    <>
+      <div role="radiogroup" aria-label={t('setups')} className="lb-setups">
+        {shown.map((option) => (
+          <Option
+            key={`${option.supplyId}-${option.turns}-${option.volts}`}
+            option={option}
+            best={option === plan.options[0]}
+            chosen={option === chosen}
+            bay={props.bay}
+            onChoose={() => {
+              choose(option);
+              setAll(false);
+            }}
+          />
+        ))}
+      </div>
+      {chosen && plan.options.length > 1 && <Button variant="minimal" text={all ? t('setupsLess') : t('setupsMore', { n: plan.options.length - 1 })} onClick={() => setAll(!all)} aria-expanded={all} />}
+    </>
   );
 }
 
