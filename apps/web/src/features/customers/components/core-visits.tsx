@@ -12,6 +12,7 @@ import { dayOf } from '../../../lib/format.js';
 import { jobRecordsQuery } from '../../../lib/job-queries.js';
 import { coreVisitOf, type CoreVisit } from '../core-visits.js';
 import { t } from '../text.js';
+import './customers.css';
 
 interface Row extends CoreVisit {
   readonly jobId: string;

@@ -43,7 +43,8 @@ function EditCustomer({ customer, onDone }: { readonly customer: CustomerView; r
   const tell = useTell();
   const form = useForm<CustomerForm>({ defaultValues: customerFormOf(customer) });
   const { control, handleSubmit, setError, reset, getValues } = form;
-  const draft = useDraft(form, `customer:${customer.id}`);
+  const [basis] = useState(customer.version);
+  const draft = useDraft(form, `customer:${customer.id}`, { basis });
   const [version, setVersion] = useState(customer.version);
   const theirs = update.error instanceof ApiError && update.error.code === 'CHANGED_MEANWHILE' ? theirsOf(update.error.current) : null;
   const save = (values: CustomerForm, asOf: number) => {

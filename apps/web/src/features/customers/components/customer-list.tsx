@@ -2,6 +2,7 @@ import type { CustomerPage } from '@shared/customers';
 import { Link } from 'react-router-dom';
 import { DataTable, type Column } from '../../../components/data-table.js';
 import { t } from '../text.js';
+import './customers.css';
 
 type Row = CustomerPage['rows'][number];
 const COLUMNS: Column<Row>[] = [

@@ -6,6 +6,7 @@ import { Answer, Empty } from '../../../components/faces.js';
 import { Panel } from '../../../components/panel.js';
 import { machinesQuery } from '../../../lib/customer-queries.js';
 import { t } from '../text.js';
+import './customers.css';
 
 type Row = MachinePage['rows'][number];
 const COLUMNS: Column<Row>[] = [

@@ -1,7 +1,7 @@
 import { Button } from '@blueprintjs/core';
 import { customerTermsSchema, type CustomerTerms, type CustomerView } from '@shared/customers';
 import { useState } from 'react';
-import { useForm } from 'react-hook-form';
+import { useForm, useWatch } from 'react-hook-form';
 import { CheckField, ChoiceField, TextField } from '../../../components/fields.js';
 import { ErrorNotice } from '../../../components/notices.js';
 import { Facts, Panel } from '../../../components/panel.js';
@@ -38,11 +38,12 @@ export function CustomerTermsPanel({ customer }: { readonly customer: CustomerVi
 function EditTerms({ customer, onDone }: { readonly customer: CustomerView; readonly onDone: () => void }) {
   const setTerms = useSetTerms(customer.id);
   const tell = useTell();
-  const { control, handleSubmit, setError, watch } = useForm<TermsForm>({ defaultValues: { terms: customer.terms, netDays: String(customer.netDays), creditStop: customer.creditStop } });
+  const { control, handleSubmit, setError } = useForm<TermsForm>({ defaultValues: { terms: customer.terms, netDays: String(customer.netDays), creditStop: customer.creditStop } });
+  const terms = useWatch({ control, name: 'terms' });
   const save = (form: TermsForm) => {
-    const terms = termsOf(form, customer.version);
-    if (terms === null) return setError('netDays', { message: t('netDaysWrong') }, { shouldFocus: true });
-    const input: CustomerTerms | null = checked(customerTermsSchema, terms, setError);
+    const wanted = termsOf(form, customer.version);
+    if (wanted === null) return setError('netDays', { message: t('netDaysWrong') }, { shouldFocus: true });
+    const input: CustomerTerms | null = checked(customerTermsSchema, wanted, setError);
     if (!input) return;
     setTerms.mutate(input, {
       onSuccess: () => {
@@ -55,7 +56,7 @@ function EditTerms({ customer, onDone }: { readonly customer: CustomerView; read
   return (
     <form className="stack" noValidate onSubmit={handleSubmit(save)}>
       <ChoiceField control={control} name="terms" label={t('termsWords')} options={TERMS} />
-      {watch('terms') === 'account' && <TextField control={control} name="netDays" label={t('netDays')} />}
+      {terms === 'account' && <TextField control={control} name="netDays" label={t('netDays')} />}
       <CheckField control={control} name="creditStop" label={t('creditStop')} help={t('creditStopHelp')} />
       <ErrorNotice error={setTerms.error} />
       <div className="row">

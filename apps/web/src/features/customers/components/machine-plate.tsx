@@ -33,7 +33,8 @@ function EditMachine({ machine, onDone }: { readonly machine: MachineView; reado
   const tell = useTell();
   const form = useForm<MachineForm>({ defaultValues: machineFormOf(machine, units) });
   const { control, handleSubmit, setError, reset } = form;
-  const draft = useDraft(form, `machine:${machine.id}`);
+  const [basis] = useState(machine.version);
+  const draft = useDraft(form, `machine:${machine.id}`, { basis });
   const [version, setVersion] = useState(machine.version);
   const [tried, setTried] = useState<UpdateMachine | null>(null);
   const theirs = update.error instanceof ApiError && update.error.code === 'CHANGED_MEANWHILE' ? theirsOf(update.error.current) : null;

@@ -8,6 +8,7 @@ import { Quantity } from '../../../components/quantity.js';
 import { dayOf } from '../../../lib/format.js';
 import { stateName, stepName } from '../../../lib/step-names.js';
 import { t } from '../text.js';
+import './customers.css';
 
 type Visit = MachineView['visits'][number];
 

@@ -21,7 +21,8 @@ export function EditFacts({ job, onDone }: { readonly job: JobSheet; readonly on
   const tell = useTell();
   const form = useForm<FactsForm>({ defaultValues: factsFormOf(job) });
   const { control, handleSubmit, setError, reset, getValues } = form;
-  const draft = useDraft(form, `job-facts:${job.id}`);
+  const [basis] = useState(job.version);
+  const draft = useDraft(form, `job-facts:${job.id}`, { basis });
   // the version the person has read: a refreshed sheet must not turn their save into a silent overwrite
   const [version, setVersion] = useState(job.version);
   const conflict = update.error instanceof ApiError && update.error.code === 'CHANGED_MEANWHILE' ? theirsOf(update.error.current) : null;
