@@ -6,7 +6,12 @@ export type StateTone = 'open' | 'waiting' | 'good' | 'bad' | 'quiet';
 
 const MARKS: Record<StateTone, ReactNode> = {
   open: <circle cx="8" cy="8" r="5.5" fill="none" stroke="currentColor" strokeWidth="2.2" />,
-  waiting: <path d="M8 1.5A6.5 6.5 0 1 0 8 14.5Z M8 2.5A5.5 5.5 0 0 1 8 13.5" fill="currentColor" fillRule="evenodd" stroke="currentColor" strokeWidth="1.4" />,
+  waiting: (
+    <>
+      <circle cx="8" cy="8" r="5.8" fill="none" stroke="currentColor" strokeWidth="1.8" />
+      <path d="M8 2.2A5.8 5.8 0 0 0 8 13.8Z" fill="currentColor" />
+    </>
+  ),
   good: <path d="M2 8.5 6.5 13 14 4" fill="none" stroke="currentColor" strokeWidth="2.6" />,
   bad: <path d="M3 3 13 13M13 3 3 13" fill="none" stroke="currentColor" strokeWidth="2.6" />,
   quiet: <path d="M2 8H14" stroke="currentColor" strokeWidth="2" />,
