@@ -124,7 +124,6 @@ export const t = defineText({
 
   timerStart: 'Full flux: start the clock',
   timerStop: 'Stop at {time}',
-  switchOff: 'Switch off',
 
   wattsPerKg: 'loss at the target flux',
   vaPerKg: 'VA/kg',

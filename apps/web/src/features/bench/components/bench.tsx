@@ -164,8 +164,9 @@ function Notices({ live, waived, missingBefore, job }: { readonly live: LiveTest
     <>
       {live.stop.length > 0 && (
         <div className="lb-bench-stop" role="alert">
-          <b>{t('switchOff')}</b>
-          <span>{live.stop.map((r) => r.words).join(' ')}</span>
+          {live.stop.map((r) => (
+            <b key={r.code}>{r.words}</b>
+          ))}
         </div>
       )}
       {waived && <Callout compact>{t('waived')}</Callout>}

@@ -1,7 +1,7 @@
 import type { BayView, InstrumentView } from '@shared/instruments';
 import { useFormContext, useWatch } from 'react-hook-form';
 import { CheckField, ChoiceField, SelectField, TextField } from '../../../components/fields.js';
-import { formatUsual } from '@libs/quantities';
+import { formatQuantity } from '@libs/quantities';
 import { useUnits } from '../../../components/units.js';
 import { METERS, type BenchValues } from '../bench-form.js';
 import type { LiveTest } from '../live-test.js';
@@ -35,7 +35,7 @@ export function ReadingsColumn({ live, bay, timerKey, ampsRising, onAmpsRising }
     <section className="lb-bench-column" aria-labelledby="bench-readings">
       <div className="row spread">
         <h2 id="bench-readings">{t('readings')}</h2>
-        {flux && <span className="measured num">{t('setVolts', { volts: formatUsual(flux.wantedSearchVoltsV, 'voltage', system) })}</span>}
+        {flux && <span className="measured num">{t('setVolts', { volts: formatQuantity(flux.wantedSearchVoltsV, 'voltage', system, { significant: 4 }) })}</span>}
       </div>
       <div className="lb-bench-fields three">
         <BenchField name="reading.searchVoltsV" label={t('searchVoltsV')} large />
