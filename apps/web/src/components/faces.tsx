@@ -1,8 +1,9 @@
-import { Button, Callout, Spinner } from '@blueprintjs/core';
+import { Button, Spinner } from '@blueprintjs/core';
 import type { UseQueryResult } from '@tanstack/react-query';
 import type { ReactNode } from 'react';
 import { ApiError } from '../lib/http.js';
 import { defineText } from '../lib/text.js';
+import { Notice } from './notice.js';
 import './faces.css';
 
 const t = defineText({
@@ -23,11 +24,11 @@ export function Waiting({ words = t('waiting') }: { readonly words?: string }) {
 export function Failed({ error, onAgain }: { readonly error: unknown; readonly onAgain?: () => void }) {
   const api = error instanceof ApiError ? error : null;
   return (
-    <Callout className="lb-face-failed" intent="danger" title={t('failed')} role="alert">
+    <Notice className="lb-face-failed" intent="danger" title={t('failed')} role="alert">
       <p>{error instanceof Error ? error.message : String(error)}</p>
       {api?.requestId && <p className="muted">{t('number', { id: api.requestId })}</p>}
       {onAgain && <Button text={t('again')} onClick={onAgain} />}
-    </Callout>
+    </Notice>
   );
 }
 
@@ -35,7 +36,7 @@ export function Failed({ error, onAgain }: { readonly error: unknown; readonly o
 export function Empty({ title, children }: { readonly title: string; readonly children?: ReactNode }) {
   return (
     <div className="lb-face lb-face-empty">
-      <h3>{title}</h3>
+      <p className="lb-face-title">{title}</p>
       {children && <div className="muted">{children}</div>}
     </div>
   );

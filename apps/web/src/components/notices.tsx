@@ -3,6 +3,7 @@ import type { GateCondition } from '@shared/errors';
 import type { ReactNode } from 'react';
 import { ApiError } from '../lib/http.js';
 import { defineText } from '../lib/text.js';
+import { Notice } from './notice.js';
 import './notices.css';
 
 const t = defineText({
@@ -69,7 +70,7 @@ export interface Difference {
 /** Two people changed one thing: both values side by side, and the person decides. */
 export function ConflictNotice({ differences, onTakeTheirs, onKeepMine }: { readonly differences: readonly Difference[]; readonly onTakeTheirs: () => void; readonly onKeepMine: () => void }) {
   return (
-    <Callout intent="warning" role="alert" title={t('conflict')}>
+    <Notice intent="warning" role="alert" title={t('conflict')}>
       <p>{t('conflictHelp')}</p>
       <table className="lb-conflict">
         <thead>
@@ -93,6 +94,6 @@ export function ConflictNotice({ differences, onTakeTheirs, onKeepMine }: { read
         <Button text={t('takeTheirs')} onClick={onTakeTheirs} />
         <Button intent="primary" text={t('keepMine')} onClick={onKeepMine} />
       </div>
-    </Callout>
+    </Notice>
   );
 }

@@ -1,16 +1,10 @@
-import { Button, Menu, MenuDivider, MenuItem, PopoverNext } from '@blueprintjs/core';
+import { Button, PopoverNext, PopupKind, Radio, RadioGroup, Switch } from '@blueprintjs/core';
 import { CaretDown } from '@blueprintjs/icons';
 import type { Preferences } from '@shared/session';
 import { useNavigate } from 'react-router-dom';
 import { useMe, useSetPreferences, useSignOut } from '../../lib/me.js';
 import { setSingleKeys, useSingleKeys } from './single-keys.js';
 import { t } from './text.js';
-
-const THEMES: readonly [Preferences['theme'], 'system' | 'light' | 'dark'][] = [
-  ['system', 'system'],
-  ['light', 'light'],
-  ['dark', 'dark'],
-];
 
 /** Units, theme and sign-out of the person signed in. */
 export function AccountMenu() {
@@ -20,28 +14,39 @@ export function AccountMenu() {
   const navigate = useNavigate();
   const singleKeys = useSingleKeys();
   const { preferences } = me;
-  const menu = (
-    <Menu aria-label={t('account', { name: me.name })}>
-      <MenuDivider title={t('units')} />
-      <MenuItem roleStructure="listoption" selected={preferences.units === 'si'} text={t('si')} onClick={() => set.mutate({ ...preferences, units: 'si' })} />
-      <MenuItem roleStructure="listoption" selected={preferences.units === 'inch-pound'} text={t('inchPound')} onClick={() => set.mutate({ ...preferences, units: 'inch-pound' })} />
-      <MenuDivider title={t('theme')} />
-      {THEMES.map(([theme, key]) => (
-        <MenuItem key={theme} roleStructure="listoption" selected={preferences.theme === theme} text={t(key)} onClick={() => set.mutate({ ...preferences, theme })} />
-      ))}
-      {!me.roles.includes('customer') && (
-        <>
-          <MenuDivider title={t('keys')} />
-          <MenuItem roleStructure="listoption" selected={singleKeys} text={t('slash')} shouldDismissPopover={false} onClick={() => setSingleKeys(!singleKeys)} />
-        </>
+  const change = (part: Partial<Preferences>) => set.mutate({ ...preferences, ...part });
+  const panel = (
+    <div className="lb-account">
+      <p className="muted">{me.email}</p>
+      <RadioGroup label={t('units')} inline selectedValue={preferences.units} onChange={(e) => change({ units: e.currentTarget.value as Preferences['units'] })}>
+        <Radio value="si" label={t('si')} />
+        <Radio value="inch-pound" label={t('inchPound')} />
+      </RadioGroup>
+      <RadioGroup label={t('theme')} inline selectedValue={preferences.theme} onChange={(e) => change({ theme: e.currentTarget.value as Preferences['theme'] })}>
+        <Radio value="system" label={t('system')} />
+        <Radio value="light" label={t('light')} />
+        <Radio value="dark" label={t('dark')} />
+      </RadioGroup>
+      {!me.roles.includes('customer') && <Switch checked={singleKeys} label={t('slash')} onChange={(e) => setSingleKeys(e.currentTarget.checked)} />}
+      {set.error && (
+        <p className="lb-problem" role="alert">
+          {set.error.message}
+        </p>
       )}
-      <MenuDivider />
-      {me.shop.mailboxUrl && <MenuItem text={t('mailbox')} href={me.shop.mailboxUrl} target="_blank" rel="noreferrer" />}
-      <MenuItem text={t('signOut')} onClick={() => signOut.mutate(undefined, { onSettled: () => void navigate('/sign-in') })} />
-    </Menu>
+      <div className="row spread">
+        {me.shop.mailboxUrl ? (
+          <a href={me.shop.mailboxUrl} target="_blank" rel="noreferrer">
+            {t('mailbox')}
+          </a>
+        ) : (
+          <span />
+        )}
+        <Button text={t('signOut')} loading={signOut.isPending} onClick={() => signOut.mutate(undefined, { onSettled: () => void navigate('/sign-in') })} />
+      </div>
+    </div>
   );
   return (
-    <PopoverNext content={menu} placement="bottom-end">
+    <PopoverNext content={panel} placement="bottom-end" popupKind={PopupKind.DIALOG}>
       <Button variant="minimal" endIcon={<CaretDown />} text={me.name} aria-label={t('account', { name: me.name })} />
     </PopoverNext>
   );

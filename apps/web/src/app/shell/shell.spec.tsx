@@ -136,6 +136,26 @@ describe('the frame around every page', () => {
   });
 });
 
+describe('what a person sets for themselves', () => {
+  it('changes the units on the server and at once on the page', async () => {
+    open();
+    fetched.mockImplementation((_, init) => Promise.resolve(json({ ...manager, preferences: JSON.parse(String(init?.body)) as unknown })));
+    await person.click(screen.getByRole('button', { name: 'Signed in as Mira Holt' }));
+    await person.click(await screen.findByRole('radio', { name: 'inch-pound' }));
+    await waitFor(() => expect(screen.getByRole<HTMLInputElement>('radio', { name: 'inch-pound' }).checked).toBe(true));
+    const [path, init] = fetched.mock.calls[0]!;
+    expect([path, init?.method, init?.body]).toEqual(['/api/session/preferences', 'PUT', '{"units":"inch-pound","theme":"dark"}']);
+  });
+
+  it('goes light when light is chosen', async () => {
+    open();
+    fetched.mockImplementation((_, init) => Promise.resolve(json({ ...manager, preferences: JSON.parse(String(init?.body)) as unknown })));
+    await person.click(screen.getByRole('button', { name: 'Signed in as Mira Holt' }));
+    await person.click(await screen.findByRole('radio', { name: 'light' }));
+    await waitFor(() => expect(document.body.classList.contains('bp6-dark')).toBe(false));
+  });
+});
+
 describe('the search box', () => {
   const box = () => screen.findByRole('combobox');
 
