@@ -1,9 +1,10 @@
-import { formatUsual, type Kind, type UnitSystem } from '@libs/quantities';
+import type { Kind, UnitSystem } from '@libs/quantities';
 import { machineViewSchema, updateMachineSchema, type MachineView, type Nameplate, type UpdateMachine } from '@shared/machines';
 import type { Difference } from '../../components/notices.js';
 import { problemsOf } from '../../lib/form-problems.js';
 import { connectionName, machineKindName } from '../../lib/machine-words.js';
 import { nameplateFormOf, readNameplate, type NameplateForm } from '../../lib/nameplate-form.js';
+import { plateFigure } from '../../lib/plate-words.js';
 import { FormReader, type FormProblem } from '../../lib/typed.js';
 import { t } from './text.js';
 
@@ -61,7 +62,7 @@ function shown(nameplate: Nameplate, [key, , kind]: Row, system: UnitSystem): st
   if (key === 'connection') return connectionName(nameplate.connection);
   if (key === 'efficiencyPercent') return `${String(value)} %`;
   if (typeof value === 'boolean') return value ? t('yes') : t('no');
-  return kind && typeof value === 'number' ? formatUsual(value, kind, system) : String(value);
+  return kind && typeof value === 'number' ? plateFigure(value, kind, system) : String(value);
 }
 
 /** What stands on the plate, for reading. */

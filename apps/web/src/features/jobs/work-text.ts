@@ -146,6 +146,8 @@ export const t = defineText({
   deliver: 'Record the delivery',
   delivered: 'Taken by {by}, {when}. Delivery note {number}.',
   deliveredOpen: 'Open the delivery note',
+  deliveryMissing: 'It cannot go out yet:',
+  deliveryCounter: 'The counter records who takes it.',
   deliveryNotYet: 'A machine goes out when its job is ready.',
   // credit
   credit: 'Credit stop',

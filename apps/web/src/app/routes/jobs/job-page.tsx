@@ -7,6 +7,7 @@ import { sheetsOf, Spine } from '../../../components/spine.js';
 import { JobMoney } from '../../../features/accounts/components/job-money.js';
 import { AttachmentsPanel } from '../../../features/attachments/components/attachments-panel.js';
 import { CorePanel } from '../../../features/jobs/components/core-panel.js';
+import { CreditPanel } from '../../../features/jobs/components/credit-panel.js';
 import { FactsPanel } from '../../../features/jobs/components/facts-panel.js';
 import { HistoryPanel } from '../../../features/jobs/components/history-panel.js';
 import { JobHead } from '../../../features/jobs/components/job-head.js';
@@ -77,7 +78,12 @@ function Sheet({ job }: { readonly job: JobSheet }) {
           </div>
         )}
         {tab === 'history' && <HistoryPanel jobId={job.id} />}
-        {tab === 'money' && <JobMoney jobId={job.id} />}
+        {tab === 'money' && (
+          <div className="stack">
+            <CreditPanel job={job} />
+            <JobMoney jobId={job.id} />
+          </div>
+        )}
       </div>
     </div>
   );

@@ -5,7 +5,7 @@ import { Answer, Empty } from '../../../components/faces.js';
 import { Panel } from '../../../components/panel.js';
 import { floorPageQuery } from '../../../lib/floor-queries.js';
 import { calendarDay, dayOf } from '../../../lib/format.js';
-import { stepName } from '../../../lib/step-names.js';
+import { stateName, stepName } from '../../../lib/step-names.js';
 import { t } from '../text.js';
 import './book-in.css';
 
@@ -35,7 +35,7 @@ export function CounterJobs({ title, params, more, none, noneHelp, today, show }
                   <b>{job.number}</b>
                   <span className="num">{show === 'received' ? dayOf(job.receivedAt) : promiseOf(job)}</span>
                   <span>{job.customerName}</span>
-                  <Standing job={job} today={today} />
+                  <Standing job={job} today={show === 'promise' ? today : null} />
                   <span className="muted">{job.machine}</span>
                 </Link>
               </li>
@@ -49,8 +49,8 @@ export function CounterJobs({ title, params, more, none, noneHelp, today, show }
 
 const promiseOf = ({ promisedOn }: FloorRow): string => (promisedOn ? calendarDay(promisedOn) : t('noPromise'));
 
-function Standing({ job, today }: { readonly job: FloorRow; readonly today: string }) {
-  if (job.late) return <span className="late right">{t('late')}</span>;
-  if (job.promisedOn === today) return <b className="right">{t('today')}</b>;
-  return <span className="muted right">{stepName(job.step)}</span>;
+function Standing({ job, today }: { readonly job: FloorRow; readonly today: string | null }) {
+  if (today !== null && job.late) return <span className="late right">{t('late')}</span>;
+  if (today !== null && job.promisedOn === today) return <b className="right">{t('today')}</b>;
+  return <span className="muted right">{job.state === 'open' || job.state === 'on-hold' ? stepName(job.step) : stateName(job.state)}</span>;
 }

@@ -58,7 +58,7 @@ export function CustomerChoice({ form, onChosen }: ChoiceProps) {
     <>
       <Field label={t('findCustomer')} help={customer.customerId ? `${customer.name}: ${t('chosen')}` : t('findCustomerHelp')} problem={fieldState.error?.message}>
         {({ id, describedBy, invalid }) => (
-          <InputGroup id={id} inputRef={field.ref} type="search" autoComplete="off" autoFocus value={q} onChange={(e) => setQ(e.target.value)} aria-describedby={describedBy} aria-invalid={invalid} />
+          <InputGroup id={id} className="lb-flow-search" inputRef={field.ref} type="search" autoComplete="off" autoFocus value={q} onChange={(e) => setQ(e.target.value)} aria-describedby={describedBy} aria-invalid={invalid} />
         )}
       </Field>
       <ErrorNotice error={found.error} />

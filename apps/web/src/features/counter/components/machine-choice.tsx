@@ -55,7 +55,7 @@ export function MachineChoice({ form, onChosen }: ChoiceProps) {
     <>
       <Field label={t('findMachine')} help={t('findMachineHelp')} problem={fieldState.error?.message}>
         {({ id, describedBy, invalid }) => (
-          <InputGroup id={id} inputRef={field.ref} type="search" autoComplete="off" autoFocus value={q} onChange={(e) => setQ(e.target.value)} aria-describedby={describedBy} aria-invalid={invalid} />
+          <InputGroup id={id} className="lb-flow-search" inputRef={field.ref} type="search" autoComplete="off" autoFocus value={q} onChange={(e) => setQ(e.target.value)} aria-describedby={describedBy} aria-invalid={invalid} />
         )}
       </Field>
       <ErrorNotice error={found.error} />

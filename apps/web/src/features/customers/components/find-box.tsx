@@ -15,5 +15,5 @@ export function FindBox() {
     const later = setTimeout(() => setParams(typed.trim() === '' ? {} : { q: typed.trim() }, { replace: true }), 250);
     return () => clearTimeout(later);
   }, [typed, asked, setParams]);
-  return <InputGroup className="lb-find" type="search" leftElement={<Search className="lb-find-icon" />} value={typed} onChange={(e) => setTyped(e.target.value)} placeholder={t('find')} aria-label={t('findLabel')} />;
+  return <InputGroup className="lb-find" type="search" leftElement={<span className="lb-find-icon"><Search /></span>} value={typed} onChange={(e) => setTyped(e.target.value)} placeholder={t('find')} aria-label={t('findLabel')} />;
 }

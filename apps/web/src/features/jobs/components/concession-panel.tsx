@@ -24,7 +24,7 @@ export function ConcessionPanel({ job, record }: PanelProps) {
   if (concession) return <SignatureLine signOff={concession} words={(s) => t('concessionSigned', s)} />;
   if (!decision || !holds || decision.detail['choice'] !== 'accept-with-concession') return null;
   return (
-    <div className="lb-ask">
+    <div className="lb-to-answer">
       <h3>{t('concession')}</h3>
       <p>{t('concessionWords')}</p>
       {maySign ? <Button intent="primary" text={t('signConcession')} onClick={() => setOpen(true)} /> : <p className="muted">{t('managerOnly')}</p>}
@@ -53,7 +53,7 @@ export function InconclusivePanel({ job, record }: PanelProps) {
   const [open, setOpen] = useState(false);
   if (released) return <SignatureLine signOff={released} words={(s) => t('inconclusiveSigned', s)} />;
   return (
-    <div className="lb-ask">
+    <div className="lb-to-answer">
       <h3>{t('inconclusive')}</h3>
       <p>{t('inconclusiveWords')}</p>
       {maySign && <Button text={t('releaseInconclusive')} onClick={() => setOpen(true)} />}

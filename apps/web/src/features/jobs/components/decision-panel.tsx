@@ -26,7 +26,7 @@ export function DecisionPanel({ job, record, about }: DecisionProps) {
   const mayRecord = useMay('decisions.record');
   const [open, setOpen] = useState(false);
   return (
-    <div className="lb-ask">
+    <div className="lb-to-answer">
       <h3>{t('decision')}</h3>
       {decision ? (
         <>

@@ -3,7 +3,7 @@ import { recordDeliverySchema, type JobSheet } from '@shared/jobs';
 import { hasReached } from '@shared/route';
 import { useForm } from 'react-hook-form';
 import { TextAreaField, TextField } from '../../../components/fields.js';
-import { ErrorNotice } from '../../../components/notices.js';
+import { Conditions, ErrorNotice } from '../../../components/notices.js';
 import { Panel } from '../../../components/panel.js';
 import { checked, showServerProblems } from '../../../lib/form-problems.js';
 import { momentOf } from '../../../lib/format.js';
@@ -15,7 +15,8 @@ import { t } from '../work-text.js';
 export function DeliveryPanel({ job }: { readonly job: JobSheet }) {
   const mayRecord = useMay('delivery.record');
   const delivery = job.signOffs.find((s) => s.kind === 'delivery');
-  const goesOut = job.state === 'returned-unrepaired' || hasReached(job.route, job.step, 'ready');
+  const goesOut = job.state === 'returned-unrepaired' || (job.state === 'open' && hasReached(job.route, job.step, 'ready'));
+  const missing = job.state === 'open' ? stillMissing(job) : [];
   return (
     <Panel title={<span id="delivery">{t('delivery')}</span>}>
       {delivery ? (
@@ -27,14 +28,24 @@ export function DeliveryPanel({ job }: { readonly job: JobSheet }) {
             </a>
           )}
         </div>
+      ) : goesOut && missing.length > 0 ? (
+        <div className="stack">
+          <p>{t('deliveryMissing')}</p>
+          <Conditions conditions={missing} />
+        </div>
       ) : goesOut && mayRecord ? (
         <DeliveryForm job={job} />
+      ) : goesOut ? (
+        <p className="muted">{t('deliveryCounter')}</p>
       ) : (
         <p className="muted">{t('deliveryNotYet')}</p>
       )}
     </Panel>
   );
 }
+
+/** The signature comes last: everything else that the release asks for must be there before the machine leaves. */
+const stillMissing = (job: JobSheet) => (job.gates.find((g) => g.gate === 'released')?.conditions ?? []).filter((c) => !c.met && c.code !== 'DELIVERY_NOTE');
 
 function DeliveryForm({ job }: { readonly job: JobSheet }) {
   const deliver = useRecordDelivery(job.id);

@@ -1,15 +1,18 @@
 import { Button } from '@blueprintjs/core';
 import { moveLimitsSchema, type JobSheet } from '@shared/jobs';
+import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { useForm } from 'react-hook-form';
 import { ConfirmDialog } from '../../../components/confirm-dialog.js';
 import { TextField } from '../../../components/fields.js';
 import { Facts, Panel } from '../../../components/panel.js';
-import { Quantity } from '../../../components/quantity.js';
+import { useUnits } from '../../../components/units.js';
 import { calendarDay } from '../../../lib/format.js';
 import { checked, showServerProblems } from '../../../lib/form-problems.js';
 import { useMay } from '../../../lib/me.js';
+import { plateLine } from '../../../lib/plate-words.js';
 import { useMoveLimits } from '../api/job-changes.js';
+import { limitsVersionsQuery } from '../api/limits-query.js';
 import { isEnded } from '../move-form.js';
 import { CONTAMINATION_WORDS, t } from '../text.js';
 import { EditFacts } from './edit-facts.js';
@@ -20,14 +23,16 @@ export function FactsPanel({ job }: { readonly job: JobSheet }) {
   const [newer, setNewer] = useState(false);
   const mayEdit = useMay('jobs.edit');
   const mayMoveLimits = useMay('limits.publish') && !isEnded(job);
+  const units = useUnits();
   const { nameplate } = job.machine;
+  const newest = useQuery({ ...limitsVersionsQuery, enabled: mayMoveLimits }).data?.[0]?.version ?? job.limitsVersion;
   const contamination = `${CONTAMINATION_WORDS[job.contamination] ?? job.contamination}${job.contaminationWords ? `: ${job.contaminationWords}` : ''}`;
   return (
     <Panel title={t('facts')} actions={mayEdit && !editing ? <Button text={t('edit')} onClick={() => setEditing(true)} /> : undefined}>
       {editing ? (
         <EditFacts job={job} onDone={() => setEditing(false)} />
       ) : (
-        <div className="lb-taken-in">
+        <div className="stack">
           <p className="lb-complaint">{job.complaint}</p>
           <Facts
             rows={[
@@ -35,12 +40,7 @@ export function FactsPanel({ job }: { readonly job: JobSheet }) {
               [t('contamination'), contamination],
               [t('promisedOn'), job.promisedOn ? calendarDay(job.promisedOn) : t('noPromise')],
               [t('customerReference'), job.customerReference || '–'],
-              [
-                t('plate'),
-                <span key="plate">
-                  <Quantity si={nameplate.ratedPowerW} kind="rated-power" /> <Quantity si={nameplate.ratedVoltageV} kind="voltage" /> <Quantity si={nameplate.ratedFrequencyHz} kind="frequency" />
-                </span>,
-              ],
+              [t('plate'), plateLine(nameplate, units) || '–'],
               [t('serial'), nameplate.serial || '–'],
               [t('contact'), [job.customer.contactName, job.customer.phone].filter(Boolean).join(', ') || job.customer.email],
               [t('terms'), `${job.customer.terms === 'account' ? t('account', { days: job.customer.netDays }) : t('prepayment')}${job.customer.creditStop ? `, ${t('creditStop').toLowerCase()}` : ''}`],
@@ -48,7 +48,7 @@ export function FactsPanel({ job }: { readonly job: JobSheet }) {
           />
           <p className="muted row">
             <span>{t('limits', { n: job.limitsVersion })}</span>
-            {mayMoveLimits && <Button variant="minimal" text={t('newerLimits')} onClick={() => setNewer(true)} />}
+            {mayMoveLimits && newest > job.limitsVersion && <Button variant="minimal" text={t('newerLimits')} onClick={() => setNewer(true)} />}
           </p>
         </div>
       )}

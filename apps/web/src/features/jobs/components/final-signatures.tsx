@@ -21,7 +21,7 @@ export function FinalSignatures({ job, record }: { readonly job: JobSheet; reado
   const close = () => setOpen(null);
   const mine = tested?.by === me.name;
   return (
-    <div className="lb-ask">
+    <div className="lb-to-answer">
       <h3>{t('signatures')}</h3>
       {tested ? <SignatureLine signOff={tested} words={(s) => t('tested', s)} /> : <p>{correctedSince ? t('corrected') : t('testedMissing')}</p>}
       {!tested && maySign && <Button intent="primary" text={t('sign')} onClick={() => setOpen('sign')} />}

@@ -46,7 +46,7 @@ export function FloorFilters({ filter }: { readonly filter: FloorFilter }) {
   }, [typed]);
   return (
     <form className="lb-filters" role="search" aria-label={t('filters')} onSubmit={(e) => e.preventDefault()}>
-      <InputGroup className="lb-filter-text" type="search" leftElement={<Search className="lb-filter-icon" />} value={typed} onChange={(e) => setTyped(e.target.value)} placeholder={t('search')} aria-label={t('searchLabel')} />
+      <InputGroup className="lb-filter-text" type="search" leftElement={<span className="lb-filter-icon"><Search /></span>} value={typed} onChange={(e) => setTyped(e.target.value)} placeholder={t('search')} aria-label={t('searchLabel')} />
       <HTMLSelect aria-label={t('step')} value={filter.step ?? ''} onChange={(e) => set({ step: e.target.value })}>
         <option value="">{t('anyStep')}</option>
         {STEPS.map((step) => (

@@ -41,5 +41,9 @@ const columnsFor = (today: string): Column<FloorRow>[] => [
 
 /** The jobs of the list, each with its spine. */
 export function FloorTable({ page, today }: { readonly page: FloorPage; readonly today: string }) {
-  return <DataTable caption={t('caption')} columns={columnsFor(today)} rows={page.rows} rowKey={(row) => row.id} total={page.total} page={page.page} size={page.size} />;
+  return (
+    <div className="lb-floor">
+      <DataTable caption={t('caption')} columns={columnsFor(today)} rows={page.rows} rowKey={(row) => row.id} total={page.total} page={page.page} size={page.size} />
+    </div>
+  );
 }

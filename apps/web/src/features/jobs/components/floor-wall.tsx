@@ -21,15 +21,13 @@ export function FloorWall({ rows, today }: { readonly rows: readonly FloorRow[];
           <ul>
             {jobs.map((job) => (
               <li key={job.id} className={job.state === 'on-hold' ? 'held' : ''}>
-                <div className="row spread">
-                  <Link className="lb-number" to={`/jobs/${job.id}`}>
-                    {job.number}
-                  </Link>
-                  {isVerdict(job.coreVerdict) && job.coreVerdict !== 'conforms' && <VerdictTag verdict={job.coreVerdict} />}
-                </div>
+                <Link className="lb-number" to={`/jobs/${job.id}`}>
+                  {job.number}
+                </Link>
                 <div>{job.customerName}</div>
                 <div className="muted">{job.machine}</div>
                 <PromiseMark promisedOn={job.promisedOn} today={today} />
+                {isVerdict(job.coreVerdict) && job.coreVerdict !== 'conforms' && <VerdictTag verdict={job.coreVerdict} />}
                 <WaitingMark {...job} />
               </li>
             ))}

@@ -1,6 +1,7 @@
 import type { JobSheet } from '@shared/jobs';
 import { Link } from 'react-router-dom';
 import { PageHeader } from '../../../components/panel.js';
+import { MiniSpine } from '../../../components/spine.js';
 import { dayOf, shopToday } from '../../../lib/format.js';
 import { routeName, stateName } from '../../../lib/step-names.js';
 import { isEnded } from '../move-form.js';
@@ -14,6 +15,9 @@ export function JobHead({ job }: { readonly job: JobSheet }) {
       title={job.number}
       below={
         <span className="lb-job-below">
+          <span className="lb-job-mini">
+            <MiniSpine job={job} />
+          </span>
           <Link to={`/counter/customers/${job.customer.id}`}>{job.customer.name}</Link>
           <Link to={`/counter/machines/${job.machine.id}`}>{job.machine.description}</Link>
           <span>{routeName(job.route)}</span>

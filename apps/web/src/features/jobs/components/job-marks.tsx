@@ -13,13 +13,13 @@ export function PromiseMark({ promisedOn, today, ended = false }: { readonly pro
       {standing.kind === 'late' && (
         <span className="lb-mark lb-mark-late">
           <Flag />
-          {standing.days === 1 ? t('lateByOne') : t('lateBy', { days: standing.days })}
+          <span>{standing.days === 1 ? t('lateByOne') : t('lateBy', { days: standing.days })}</span>
         </span>
       )}
       {standing.kind === 'today' && (
         <span className="lb-mark lb-mark-today">
           <Dot />
-          {t('dueToday')}
+          <span>{t('dueToday')}</span>
         </span>
       )}
     </span>
@@ -37,19 +37,20 @@ interface WaitingProps {
 export function WaitingMark({ state, step, holdReason, waitingFor }: WaitingProps) {
   if (state === 'on-hold') {
     return (
-      <span className="lb-mark lb-mark-held" title={holdReason ?? undefined}>
-        <Bars />
-        {t('onHold')}
-        {waitingFor && `, ${t('waitsFor', { who: waitingWords(waitingFor) })}`}
+      <>
+        <span className="lb-mark lb-mark-held">
+          <Bars />
+          <span>{waitingFor ? `${t('onHold')}, ${t('waitsFor', { who: waitingWords(waitingFor) })}` : t('onHold')}</span>
+        </span>
         {holdReason && <span className="lb-mark-why">{holdReason}</span>}
-      </span>
+      </>
     );
   }
   if (state === 'open' && step === 'awaiting-approval') {
     return (
       <span className="lb-mark lb-mark-waiting">
         <Hourglass />
-        {t('waitsForCustomer')}
+        <span>{t('waitsForCustomer')}</span>
       </span>
     );
   }

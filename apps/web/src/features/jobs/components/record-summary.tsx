@@ -74,13 +74,13 @@ export function RecordsOfKind({ jobId, kind, records, mayRecord, reached }: Kind
       {made.map((record) => (
         <RecordSummary key={record.id} record={record} numbered={made.length > 1} />
       ))}
-      {made.length === 0 && !mayRecord && (
+      {made.length === 0 && !mayRecord && kind !== 'core-repair' && (
         <p className="muted">
           {recordName(kind)}: {t('noOne')}
         </p>
       )}
       {mayRecord && reached && (
-        <Link className={`lb-open-work${made.length === 0 ? ' lb-open-work-first' : ''}`} to={`/jobs/${jobId}/work/${kind}`}>
+        <Link className={`lb-open-work${made.length === 0 && kind !== 'core-repair' ? ' lb-open-work-first' : ''}`} to={`/jobs/${jobId}/work/${kind}`}>
           {words}
         </Link>
       )}

@@ -30,6 +30,7 @@ export function StepWork({ job, step, records }: StepWorkProps) {
   if (step === 'ready' || step === 'released') return <GoingOut job={job} />;
   const reached = hasReached(job.route, job.step, step);
   const kinds = kindsAt(step, job, records);
+  const ofKind = (kind: RecordKind) => <RecordsOfKind key={kind} jobId={job.id} kind={kind} records={records} mayRecord={mayRecord && !isEnded(job)} reached={reached} />;
   return (
     <Panel title={<span id="work">{`${t('work')}: ${stepName(step)}`}</span>}>
       <div className="stack">
@@ -43,12 +44,11 @@ export function StepWork({ job, step, records }: StepWorkProps) {
             </Link>
           </>
         )}
-        {kinds.map((kind) => (
-          <RecordsOfKind key={kind} jobId={job.id} kind={kind} records={records} mayRecord={mayRecord && !isEnded(job)} reached={reached} />
-        ))}
+        {kinds.filter((kind) => kind !== 'core-repair').map(ofKind)}
         {step === 'core-test-before' && <BeforeSignatures job={job} records={records} />}
         {step === 'core-test-after' && <AfterSignatures job={job} records={records} />}
         {step === 'final-test' && <LastFinalTest job={job} records={records} />}
+        {kinds.filter((kind) => kind === 'core-repair').map(ofKind)}
       </div>
     </Panel>
   );

@@ -38,7 +38,7 @@ export function WaiverPanel({ job, testMade }: { readonly job: JobSheet; readonl
     );
   }
   return (
-    <div className="lb-ask">
+    <div className="lb-to-answer">
       <SignatureLine signOff={waiver} words={(s) => t('waiverAsked', s)} />
       {countersignature ? (
         <SignatureLine signOff={countersignature} words={(s) => t('countersigned', s)} />
