@@ -50,5 +50,5 @@ export type CustomerView = z.infer<typeof customerViewSchema>;
 export const customerRowSchema = z.strictObject({ id: idField, name: z.string(), city: z.string(), email: z.string(), openJobs: z.number().int(), machines: z.number().int() });
 export const customerPageSchema = pageOf(customerRowSchema);
 export type CustomerPage = z.infer<typeof customerPageSchema>;
-export const customerQuerySchema = z.strictObject({ ...pageQuery, q: z.string().trim().max(80).optional() });
+export const customerQuerySchema = z.strictObject({ ...pageQuery, q: lineField(80).optional() });
 export type CustomerQuery = z.infer<typeof customerQuerySchema>;

@@ -2,7 +2,9 @@ import { z } from 'zod';
 
 /** Pieces that messages are made of. */
 const CONTROL = /[\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f]/;
-const tidy = (text: string) => !CONTROL.test(text);
+/** Half a character: a database keeps another one in its place, and a hash over the text no longer fits. */
+const HALF_CHARACTER = /\p{Surrogate}/u;
+const tidy = (text: string) => !CONTROL.test(text) && !HALF_CHARACTER.test(text);
 
 export const idField = z.string().regex(/^[0-9a-z-]{8,40}$/, 'Not an identifier of this shop.');
 export const versionField = z.number().int().min(1);

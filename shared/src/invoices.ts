@@ -46,7 +46,7 @@ export const invoiceViewSchema = z.strictObject({
 export type InvoiceView = z.infer<typeof invoiceViewSchema>;
 export const invoiceRowSchema = z.strictObject({ id: idField, number: z.string(), jobId: idField, jobNumber: z.string(), customerName: z.string(), state: z.enum(INVOICE_STATES), currency: currencyField, grossMinor: z.number().int(), balanceMinor: z.number().int(), issuedAt: z.string(), dueOn: z.string(), overdue: z.boolean() });
 export const invoicePageSchema = pageOf(invoiceRowSchema);
-export const invoiceQuerySchema = z.strictObject({ ...pageQuery, state: z.enum([...INVOICE_STATES, 'overdue', 'all']).default('all'), q: z.string().trim().max(80).optional() });
+export const invoiceQuerySchema = z.strictObject({ ...pageQuery, state: z.enum([...INVOICE_STATES, 'overdue', 'all']).default('all'), q: lineField(80).optional() });
 export type InvoiceQuery = z.infer<typeof invoiceQuerySchema>;
 
 /** The portal's way to the payment page. */

@@ -113,7 +113,7 @@ export const floorQuerySchema = z.strictObject({
   step: z.enum(STEPS).optional(),
   state: z.enum([...JOB_STATES, 'not-ended', 'all']).default('not-ended'),
   late: z.enum(['yes']).optional(),
-  q: z.string().trim().max(80).optional(),
+  q: lineField(80).optional(),
 });
 export type FloorQuery = z.infer<typeof floorQuerySchema>;
 
@@ -142,7 +142,7 @@ export const createdJobSchema = z.strictObject({ id: idField, number: z.string()
 export type CreatedJob = z.infer<typeof createdJobSchema>;
 
 export const searchHitSchema = z.strictObject({ kind: z.enum(['job', 'customer', 'machine', 'invoice']), id: idField, title: z.string(), detail: z.string(), path: z.string() });
-export const searchQuerySchema = z.strictObject({ q: z.string().trim().min(1, 'Type what you look for.').max(300) });
+export const searchQuerySchema = z.strictObject({ q: requiredLine(300, 'Type what you look for.') });
 export type SearchQuery = z.infer<typeof searchQuerySchema>;
 export const searchResultSchema = z.strictObject({ hits: z.array(searchHitSchema) });
 export type SearchResult = z.infer<typeof searchResultSchema>;

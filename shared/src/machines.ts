@@ -66,5 +66,5 @@ export type MachineView = z.infer<typeof machineViewSchema>;
 export const machineRowSchema = z.strictObject({ id: idField, customerId: idField, customerName: z.string(), description: z.string(), serial: z.string(), visits: z.number().int(), lastJobNumber: z.string().nullable() });
 export const machinePageSchema = pageOf(machineRowSchema);
 export type MachinePage = z.infer<typeof machinePageSchema>;
-export const machineQuerySchema = z.strictObject({ ...pageQuery, customerId: idField.optional(), q: z.string().trim().max(80).optional() });
+export const machineQuerySchema = z.strictObject({ ...pageQuery, customerId: idField.optional(), q: lineField(80).optional() });
 export type MachineQuery = z.infer<typeof machineQuerySchema>;

@@ -39,7 +39,7 @@ export const passwordField = z.string().min(12, 'At least 12 characters.').max(2
 export const createUserSchema = z.strictObject({
   name: requiredLine(80),
   email: emailField,
-  roles: z.array(z.enum(ROLES)).min(1, 'At least one role.'),
+  roles: z.array(z.enum(ROLES)).min(1, 'At least one role.').max(ROLES.length),
   customerId: idField.nullable(),
   password: passwordField,
 });
@@ -48,7 +48,7 @@ export type CreateUser = z.infer<typeof createUserSchema>;
 export const updateUserSchema = z.strictObject({
   version: z.number().int().min(1),
   name: requiredLine(80),
-  roles: z.array(z.enum(ROLES)).min(1, 'At least one role.'),
+  roles: z.array(z.enum(ROLES)).min(1, 'At least one role.').max(ROLES.length),
   disabled: z.boolean(),
 });
 export type UpdateUser = z.infer<typeof updateUserSchema>;

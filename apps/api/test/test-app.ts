@@ -58,6 +58,10 @@ export class Person {
     private readonly cookie: string | null,
   ) {}
 
+  /** what the browser sends along by itself */
+  carries(): Record<string, string> {
+    return this.cookie ? { cookie: this.cookie } : {};
+  }
   private call(verb: Verb, path: string) {
     const r = request(this.app.getHttpServer())[verb](path).set('origin', ORIGIN);
     return this.cookie ? r.set('cookie', this.cookie) : r;

@@ -12,8 +12,7 @@ import { DocumentBuilder, SwaggerModule } from '@nestjs/swagger';
 import type { FastifyBaseLogger, FastifyReply, FastifyRequest, RawServerDefault } from 'fastify';
 import type { Logger } from 'pino';
 import type { Config } from '../config/config.js';
-import { AppError } from './app-error.js';
-import { HTTP_STATUS } from './error-status.js';
+import { answerNoAddress } from './no-address.js';
 import { requestContext } from './request-context.js';
 import { assertSameOrigin } from './same-origin.js';
 
@@ -33,6 +32,7 @@ export function createAdapter(logger: Logger | false) {
     trustProxy: 'loopback',
     forceCloseConnections: 'idle',
     routerOptions: { maxParamLength: 200 },
+    frameworkErrors: answerNoAddress,
   });
 }
 
@@ -55,17 +55,23 @@ export async function setup(app: NestFastifyApplication, config: Config): Promis
   app.setGlobalPrefix('api');
   fastify.addHook('onRequest', (request, reply, done) => {
     reply.raw.setHeader('x-request-id', request.id);
+    // files of the screens say otherwise for themselves; an address may be written in ways that a look at its beginning misses
+    reply.header('cache-control', 'no-store');
     requestContext.run({ requestId: request.id }, done);
   });
-  fastify.addHook('onRequest', (request, reply, done) => {
+  // after all the headers are set, before a byte of the body is read
+  fastify.addHook('preParsing', (request, _reply, payload, done) => {
     try {
       assertSameOrigin({ method: request.method, path: request.url.split('?')[0]!, origin: request.headers.origin, host: request.headers.host }, config.publicUrl, WEBHOOK_PATH);
-      if (request.url.startsWith('/api/')) reply.header('cache-control', 'no-store');
-      done();
+      done(null, payload);
     } catch (error) {
-      const refusal = error as AppError;
-      void reply.status(HTTP_STATUS[refusal.code]).send({ statusCode: HTTP_STATUS[refusal.code], code: refusal.code, message: refusal.message, requestId: request.id });
+      done(error as Error);
     }
+  });
+  fastify.addHook('onSend', (_request, reply, payload, done) => {
+    const type = reply.getHeader('content-type');
+    if (typeof type === 'string' && /^(text\/|application\/javascript)/.test(type) && !type.includes('charset')) reply.header('content-type', `${type}; charset=utf-8`);
+    done(null, payload);
   });
   // Connections that become idle after close() began would live on for the keep-alive time: sweep them, cut the rest after ten seconds.
   fastify.addHook('preClose', (done) => {

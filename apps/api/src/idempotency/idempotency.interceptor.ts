@@ -1,5 +1,5 @@
 import { createHash } from 'node:crypto';
-import { Injectable, type CallHandler, type ExecutionContext, type NestInterceptor } from '@nestjs/common';
+import { Injectable, type CallHandler, type ExecutionContext, type NestInterceptor, type RawBodyRequest } from '@nestjs/common';
 import type { FastifyReply } from 'fastify';
 import { from, lastValueFrom, type Observable } from 'rxjs';
 import type { ActorRequest } from '../auth/needs.js';
@@ -33,7 +33,7 @@ export class IdempotencyInterceptor implements NestInterceptor {
   ) {}
 
   intercept(context: ExecutionContext, next: CallHandler): Observable<unknown> {
-    const request = context.switchToHttp().getRequest<ActorRequest>();
+    const request = context.switchToHttp().getRequest<RawBodyRequest<ActorRequest>>();
     const key = request.headers['idempotency-key'];
     const actorId = request.user?.userId;
     if (request.method !== 'POST' || key === undefined || !actorId) return next.handle();
@@ -41,8 +41,9 @@ export class IdempotencyInterceptor implements NestInterceptor {
     return from(this.once(context, next, request, actorId, key));
   }
 
-  private async once(context: ExecutionContext, next: CallHandler, request: ActorRequest, actorId: string, key: string): Promise<unknown> {
-    const hash = createHash('sha256').update(`${request.method} ${request.url}\n${JSON.stringify(request.body ?? null)}`).digest('hex');
+  private async once(context: ExecutionContext, next: CallHandler, request: RawBodyRequest<ActorRequest>, actorId: string, key: string): Promise<unknown> {
+    // over the bytes as they came: to write a body nested a hundred thousand deep once more would break
+    const hash = createHash('sha256').update(`${request.method} ${request.url}\n`).update(request.rawBody ?? '').digest('hex');
     const name = `${actorId}|${key}`;
     const twin = this.running.get(name);
     if (twin) {

@@ -16,4 +16,7 @@ describe('an instrument’s calibration', () => {
     expect(pastGrace('2026-06-30', '2026-07-30')).toBe(false);
     expect(pastGrace('2026-06-30', '2026-07-31')).toBe(true);
   });
+  it('that never comes due is never past it', () => {
+    expect(pastGrace('9999-12-31', '2026-07-31')).toBe(false);
+  });
 });

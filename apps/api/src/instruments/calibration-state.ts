@@ -11,4 +11,4 @@ export function calibrationStanding(dueOn: string, today: string): CalibrationSt
 }
 
 /** Beyond the grace a measurement made with it does not count. */
-export const pastGrace = (dueOn: string, today: string): boolean => today > addDays(dueOn, GRACE_DAYS);
+export const pastGrace = (dueOn: string, today: string): boolean => addDays(today, -GRACE_DAYS) > dueOn;

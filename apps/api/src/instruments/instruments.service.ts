@@ -17,6 +17,8 @@ import { Instrument } from './instrument.entity.js';
 type Row = Omit<InstrumentView, 'standing'>;
 const COLUMNS = 'id, tag, kind, description, serial, percentOfReading, percentOfRange, rangeText, calibratedOn, dueOn, certificateNumber, version';
 
+const taken = () => new AppError('TAKEN', 'An instrument has this tag already.', { fields: [{ path: 'tag', code: 'taken', message: 'An instrument has this tag already.' }] });
+
 /** An instrument as it stood on the day it was used: kept with the record. */
 export interface InstrumentOnTheDay {
   readonly id: string;
@@ -64,7 +66,7 @@ export class InstrumentsService {
 
   async create(actor: Actor, input: CreateInstrument): Promise<InstrumentView> {
     return this.unitOfWork.run(async (manager) => {
-      if (await manager.existsBy(Instrument, { tag: input.tag })) throw new AppError('TAKEN', 'An instrument has this tag already.', { fields: [{ path: 'tag', code: 'taken', message: 'An instrument has this tag already.' }] });
+      if (await manager.existsBy(Instrument, { tag: input.tag })) throw taken();
       const instrument = { id: this.ids.next(), ...input, version: 1 };
       await manager.insert(Instrument, instrument);
       await this.history.record(manager, { actor, subject: { kind: 'instrument', id: instrument.id }, event: 'instrument.added', words: `${input.tag} added to the register.`, data: { ...input } });
@@ -77,6 +79,7 @@ export class InstrumentsService {
       const before = await manager.findOneBy(Instrument, { id });
       if (!before) throw notFound('instrument');
       if (before.version !== input.version) throw changedMeanwhile('instrument', { ...before });
+      if (input.tag !== before.tag && (await manager.existsBy(Instrument, { tag: input.tag }))) throw taken();
       const changed = { ...input, version: before.version + 1 };
       await manager.update(Instrument, { id }, changed);
       await this.history.record(manager, { actor, subject: { kind: 'instrument', id }, event: 'instrument.changed', words: `${input.tag} changed.`, data: { from: { ...before }, to: changed } });

@@ -6,6 +6,7 @@ import type { Actor } from '../auth/actor.js';
 import { hashPassword } from '../auth/password.js';
 import { Session } from '../auth/session.entity.js';
 import { Clock } from '../clock/clock.js';
+import { Customer } from '../customers/customer.entity.js';
 import { ReadDb } from '../database/read-db.js';
 import { UnitOfWork } from '../database/unit-of-work.js';
 import { HistoryService } from '../history/history.service.js';
@@ -46,6 +47,7 @@ export class UsersService {
     if (problem) throw new AppError('INPUT_NOT_VALID', problem, { fields: [{ path: 'roles', code: 'roles', message: problem }] });
     const passwordHash = await hashPassword(input.password);
     const id = await this.unitOfWork.run(async (manager) => {
+      if (input.customerId !== null && !(await manager.existsBy(Customer, { id: input.customerId }))) throw new AppError('INPUT_NOT_VALID', 'There is no such customer; look for it again.', { fields: [{ path: 'customerId', code: 'unknown', message: 'There is no such customer; look for it again.' }] });
       if (await manager.existsBy(User, { email: input.email })) throw new AppError('TAKEN', 'Somebody signs in with this e-mail already.', { fields: [{ path: 'email', code: 'taken', message: 'Somebody signs in with this e-mail already.' }] });
       const user = { id: this.ids.next(), email: input.email, name: input.name, passwordHash, roles: input.roles, customerId: input.customerId, units: 'si' as const, theme: 'system' as const, disabledAt: null, createdAt: this.clock.iso(), version: 1 };
       await manager.insert(User, user);
