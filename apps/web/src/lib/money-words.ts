@@ -1,4 +1,5 @@
 import type { QuoteView } from '@shared/quotes';
+import { calendarDay, momentOf } from './format.js';
 
 type MoneyLineView = QuoteView['lines'][number];
 
@@ -19,3 +20,6 @@ export const quantityWords = ({ quantityThousandths, unit }: Pick<MoneyLineView,
 export const rateText = (basisPoints: number): string => decimal(basisPoints, 2);
 /** `19 %`. */
 export const rateWords = (basisPoints: number): string => `${rateText(basisPoints)}\u00a0%`;
+
+/** When money came in: a transfer is known by its day alone, a card payment by the minute. */
+export const receivedWords = (receivedAt: string): string => (/^\d{4}-\d{2}-\d{2}$/.test(receivedAt) ? calendarDay(receivedAt) : momentOf(receivedAt));

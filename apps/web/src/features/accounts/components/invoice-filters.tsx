@@ -36,7 +36,7 @@ export function InvoiceFilters({ filter }: { readonly filter: InvoiceFilter }) {
   }, [typed]);
   return (
     <form className="row" role="search" aria-label={t('filters')} onSubmit={(e) => e.preventDefault()}>
-      <InputGroup type="search" className="lb-invoice-search" leftElement={<Search className="lb-invoice-search-icon" />} value={typed} onChange={(e) => setTyped(e.target.value)} placeholder={t('search')} aria-label={t('search')} />
+      <InputGroup type="search" className="lb-invoice-search" leftElement={<span className="lb-invoice-search-icon"><Search /></span>} value={typed} onChange={(e) => setTyped(e.target.value)} placeholder={t('search')} aria-label={t('search')} />
       <HTMLSelect aria-label={t('state')} value={filter.state ?? 'all'} onChange={(e) => set({ state: e.target.value === 'all' ? null : e.target.value })}>
         {STATE_FILTERS.map((state) => (
           <option key={state} value={state}>
