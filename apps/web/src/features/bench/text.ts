@@ -160,16 +160,16 @@ export const t = defineText({
   cautionTurn: 'A tool, a ring, a tape measure or a person that bridges the frame is a shorted turn and heats at once. Nothing loose in the bore.',
   cautionHeart: 'Strong field: keep away with a pacemaker or another implant.',
   cautionHot: 'The core gets hot, in spots very hot. Watch for a spot that runs away; fire extinguisher at hand.',
-  cautionSupply: 'Single-phase load: fuse for it. Begin with a third of the volts; at a tap the inrush is several times the current.',
+  cautionSupply: 'Single-phase load: fuse for it. Switched on at a tap, the inrush is several times the current.',
+  cautionTrial: 'Currents shown beforehand are estimates; only the trial at a third of the volts tells.',
   cautionLift: 'Lift by rated eyes and slings only; never stand under a core.',
-  cautionLaw: 'Local codes and a licensed or qualified person decide how the test is set up and who may make it. What is computed here is an aid; currents are estimates until the trial.',
-  cautionOk: 'Read. I begin the shift with this.',
-  cautionFor: 'Shown once a shift, for {name}.',
 
   kept: 'Kept as no. {n}, revision {revision}, by {by}, {when}',
   repeat: 'Test once more',
   correct: 'Correct with a reason',
   revisions: 'Earlier revisions',
   screenDiffers: 'The shop’s computer judged it differently from this screen; what stands here is what counts.',
-  beforeLoading: 'Loading the job, its tests and the bay…',
 });
+
+/** What is read once a shift before current goes on a core. */
+export const CORE_CAUTIONS = [t('cautionShock'), t('cautionTurn'), t('cautionHeart'), t('cautionHot'), t('cautionSupply'), t('cautionTrial'), t('cautionLift')];

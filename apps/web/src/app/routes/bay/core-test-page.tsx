@@ -1,9 +1,9 @@
 import { useQuery } from '@tanstack/react-query';
 import type { Phase } from '../../../features/bench/bench-form.js';
 import { Bench } from '../../../features/bench/components/bench.js';
-import { Cautions } from '../../../features/bench/components/cautions.js';
 import { KeptTest } from '../../../features/bench/components/kept-test.js';
-import { t } from '../../../features/bench/text.js';
+import { CORE_CAUTIONS, t } from '../../../features/bench/text.js';
+import { Cautions } from '../../../components/cautions.js';
 import { Answer } from '../../../components/faces.js';
 import { hasReached } from '@shared/route';
 import { RECORD_FROM_STEP, type RecordView } from '@shared/records';
@@ -49,7 +49,7 @@ function CoreTestPage({ phase }: { readonly phase: Phase }) {
                   fill ? (
                     <Answer query={bay}>
                       {(view) => (
-                        <Cautions title={`${title} · ${sheet.number}`}>
+                        <Cautions topic="core" title={`${title} · ${sheet.number}`} heading={t('cautionTitle')} lines={CORE_CAUTIONS}>
                           <Bench key={`${kind}${amend?.id ?? params.get('again') ?? ''}`} job={sheet} phase={phase} records={all} limits={set} bay={view} amend={amend} onKept={onKept} />
                         </Cautions>
                       )}

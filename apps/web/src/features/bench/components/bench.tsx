@@ -49,7 +49,7 @@ export function Bench({ job, phase, records, limits, bay, amend, onKept }: Bench
   const waived = phase === 'after' && !before && waiverInForce(job);
 
   const form = useForm<BenchValues>({ defaultValues: startOf() });
-  const draft = useDraft(form, `record:${job.id}:${kind}:${amend ? `amend-${amend.id}` : 'new'}`);
+  const draft = useDraft(form, `record:${job.id}:${kind}:${amend ? `amend-${amend.id}` : 'new'}`, { basis: amend ? amend.version : (beforeKept?.revision ?? 0) });
   const values = useWatch({ control: form.control }) as BenchValues;
   const [ampsRising, setAmpsRising] = useState(false);
   const [tried, setTried] = useState(false);
@@ -172,7 +172,7 @@ function Notices({ live, waived, missingBefore, job }: { readonly live: LiveTest
       {waived && <Callout compact>{t('waived')}</Callout>}
       {missingBefore && (
         <Callout compact intent="warning">
-          <b>{t('noBefore')}</b> {t('noBeforeWords')} <Link to={`/jobs/${job.id}`}>{t('askWaiver')}</Link>
+          <b>{t('noBefore')}</b> {t('noBeforeWords')} <Link to={`/jobs/${job.id}?step=core-test-before#work`}>{t('askWaiver')}</Link>
         </Callout>
       )}
     </>
