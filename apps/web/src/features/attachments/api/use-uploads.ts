@@ -1,7 +1,7 @@
 import { attachmentViewSchema } from '@shared/jobs';
 import { useQueryClient } from '@tanstack/react-query';
 import { useCallback, useRef, useState } from 'react';
-import { http, newKey } from '../../../lib/http.js';
+import { ApiError, http, newKey } from '../../../lib/http.js';
 import { jobKeys } from '../../../lib/job-queries.js';
 import { refusalBeforeSending } from '../upload-rules.js';
 
@@ -28,7 +28,7 @@ export function useUploads(jobId: string) {
           set(upload.key, { state: 'sent' });
           await client.invalidateQueries({ queryKey: jobKeys.sheet(jobId) });
         } catch (error) {
-          set(upload.key, { state: 'failed', words: error instanceof Error ? error.message : String(error) });
+          set(upload.key, { state: willNeverDo(error) ? 'refused' : 'failed', words: error instanceof Error ? error.message : String(error) });
         }
       });
     },
@@ -50,3 +50,6 @@ export function useUploads(jobId: string) {
   const dismiss = useCallback((key: string) => setUploads((old) => old.filter((u) => u.key !== key)), []);
   return { uploads, add, retry: send, dismiss };
 }
+
+/** The same file will be refused again; only a connection or a moment can be tried again. */
+const willNeverDo = (error: unknown): boolean => error instanceof ApiError && (error.code === 'FILE_NOT_ACCEPTED' || error.code === 'FILE_TOO_LARGE' || error.code === 'FORBIDDEN');

@@ -62,7 +62,7 @@ export function CustomerChoice({ form, onChosen }: ChoiceProps) {
         )}
       </Field>
       <ErrorNotice error={found.error} />
-      <Hits label={t('findCustomer')} hits={rows.map((row) => ({ id: row.id, name: row.name, detail: [row.city, row.email].filter(Boolean).join(', ') }))} chosen={customer.customerId} onChoose={(hit) => choose(hit.id, hit.name)} />
+      <Hits label={t('foundCustomers')} hits={rows.map((row) => ({ id: row.id, name: row.name, detail: [row.city, row.email].filter(Boolean).join(', ') }))} chosen={customer.customerId} onChoose={(hit) => choose(hit.id, hit.name)} />
       {asked !== '' && found.data && rows.length === 0 && !found.isFetching && <p role="status">{t('noCustomer', { q: asked })}</p>}
       <div>
         <Button text={t('newCustomer')} onClick={toNew} />

@@ -13,6 +13,7 @@ interface HitsProps {
 
 /** What was found, each large enough for a thumb; the chosen one is marked. */
 export function Hits({ label, hits, chosen, onChoose }: HitsProps) {
+  if (hits.length === 0) return null;
   return (
     <ul className="lb-hits" role="radiogroup" aria-label={label}>
       {hits.map((hit) => (

@@ -1,4 +1,5 @@
 import { Button, InputGroup } from '@blueprintjs/core';
+import type { MachinePage } from '@shared/machines';
 import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { useController, useWatch, type UseFormReturn } from 'react-hook-form';
@@ -49,7 +50,7 @@ export function MachineChoice({ form, onChosen }: ChoiceProps) {
   const hits = (found.data?.rows ?? []).map((row) => ({
     id: row.id,
     name: row.description,
-    detail: [row.serial, row.lastJobNumber ? t('visits', { n: row.visits, job: row.lastJobNumber }) : t('firstVisit')].filter(Boolean).join(', '),
+    detail: [row.serial, visitWords(row)].filter(Boolean).join(', '),
   }));
   return (
     <>
@@ -59,11 +60,16 @@ export function MachineChoice({ form, onChosen }: ChoiceProps) {
         )}
       </Field>
       <ErrorNotice error={found.error} />
-      <Hits label={t('findMachine')} hits={hits} chosen={machine.machineId} onChoose={(hit) => choose(hit.id, hit.name)} />
+      <Hits label={t('foundMachines')} hits={hits} chosen={machine.machineId} onChoose={(hit) => choose(hit.id, hit.name)} />
       {found.data && hits.length === 0 && !found.isFetching && <p role="status">{t('noMachine')}</p>}
       <div>
         <Button text={t('newMachine')} onClick={() => setValue('machine.kind', 'new', keep)} />
       </div>
     </>
   );
+}
+
+function visitWords({ visits, lastJobNumber }: MachinePage['rows'][number]): string {
+  if (lastJobNumber === null) return t('firstVisit');
+  return visits === 1 ? t('oneVisit', { job: lastJobNumber }) : t('visits', { n: visits, job: lastJobNumber });
 }

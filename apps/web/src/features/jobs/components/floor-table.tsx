@@ -43,7 +43,7 @@ const columnsFor = (today: string): Column<FloorRow>[] => [
 export function FloorTable({ page, today }: { readonly page: FloorPage; readonly today: string }) {
   return (
     <div className="lb-floor">
-      <DataTable caption={t('caption')} columns={columnsFor(today)} rows={page.rows} rowKey={(row) => row.id} total={page.total} page={page.page} size={page.size} />
+      <DataTable caption={t('caption')} columns={columnsFor(today)} rows={page.rows} rowKey={(row) => row.id} total={page.total} page={page.page} size={page.size} sortedBy={{ sort: 'promisedOn', order: 'asc' }} />
     </div>
   );
 }

@@ -31,7 +31,7 @@ export function StepWork({ job, step, records }: StepWorkProps) {
   const reached = hasReached(job.route, job.step, step);
   const kinds = kindsAt(step, job, records);
   const ofKind = (kind: RecordKind) => <RecordsOfKind key={kind} jobId={job.id} kind={kind} records={records} mayRecord={mayRecord && !isEnded(job)} reached={reached} />;
-  return (
+  const work = (
     <Panel title={<span id="work">{`${t('work')}: ${stepName(step)}`}</span>}>
       <div className="stack">
         {!reached && <p className="muted">{t('ahead')}</p>}
@@ -51,6 +51,15 @@ export function StepWork({ job, step, records }: StepWorkProps) {
         {kinds.filter((kind) => kind === 'core-repair').map(ofKind)}
       </div>
     </Panel>
+  );
+  // what goes back unrepaired never comes to the step where machines are handed over
+  return job.state === 'returned-unrepaired' ? (
+    <>
+      <DeliveryPanel job={job} />
+      {work}
+    </>
+  ) : (
+    work
   );
 }
 
