@@ -69,6 +69,12 @@ describe('The layout of a logger file', () => {
   it('keeps a channel whose first rows are all open', () => {
     expect(channels('Time;Core (°C);Oven (°C)\n06:00;OL;21\n06:01;;21')).toEqual(['Core/C', 'Oven/C']);
   });
+  it('begins with the first row that has a time, even while all thermocouples are open', () => {
+    expect(layout('Time;Core (°C)\n06:00;OL\n06:01;\n06:02;21').firstDataLine).toBe(2);
+  });
+  it('is not made wider by one row with a cell too many', () => {
+    expect(layout('Time;Core\n06:00;20\n06:01;21;x\n06:02;22')).toMatchObject({ width: 2, needed: 2, leftOut: [] });
+  });
   it('sees that the newest row comes first', () => {
     expect(layout('06:02;20\n06:01;21\n06:00;22')).toMatchObject({ newestFirst: true, stepS: 60 });
   });

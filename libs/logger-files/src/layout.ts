@@ -4,7 +4,7 @@ import { decimalMarkOf, readNumberCell, type DecimalMark } from './number-cell.j
 import { SEPARATORS, splitCells, type Separator } from './row-cells.js';
 import type { TemperatureUnit } from './temperature-unit.js';
 import { unitFromText } from './temperature-unit.js';
-import { createRowClock, type TimeColumn } from './time-column.js';
+import { createRowClock, readRowTime, type TimeColumn } from './time-column.js';
 
 export interface HeadLine {
   readonly text: string;
@@ -27,8 +27,10 @@ export interface Layout {
   readonly channels: readonly ChannelColumn[];
   /** columns that are no temperatures, by their heading */
   readonly leftOut: readonly string[];
-  /** cells in a row that has them all */
+  /** cells in a row that has them all: cells past them are too many */
   readonly width: number;
+  /** cells a row must have, so that no channel is missing */
+  readonly needed: number;
   readonly firstDataLine: number;
   /** seconds from row to row, the middle one of the first rows; null where they do not show any */
   readonly stepS: number | null;
@@ -92,9 +94,9 @@ function dataRows(rows: readonly (readonly string[])[], time: TimeColumn): numbe
 
 function laidOut({ separator, rows, time, data }: Candidate, head: readonly HeadLine[], hints: LayoutHints): Layout | NoLayout {
   const own = timeColumns(time);
-  const first = data[0]!;
+  const first = firstRow(rows, time, data[0]!);
   const table = data.map((i) => rows[i]!);
-  const width = Math.max(...table.map((row) => row.length));
+  const width = usualWidth(table);
   const heading = headingOf(rows.slice(0, first), own, width);
   if (separator === ',' && heading && table.every((row) => row.length - own.length === 2 * (heading.names.length - own.length))) return none('decimal-comma-and-separator');
   const { channels, leftOut } = columnsOf(heading, table, own, width);
@@ -103,7 +105,22 @@ function laidOut({ separator, rows, time, data }: Candidate, head: readonly Head
   const decimalMark = hints.decimalMark ?? decimalMarkOf(shown);
   const clock = createRowClock(time);
   const times = table.map((row) => clock.read(row, decimalMark ?? '.')).filter((t) => t !== null);
-  return { separator, decimalMark, time, channels, leftOut, width: Math.max(width, heading?.names.length ?? 0), firstDataLine: head[first]!.line, ...pace(times) };
+  const needed = Math.max(...own, ...channels.map((c) => c.column)) + 1;
+  return { separator, decimalMark, time, channels, leftOut, width: Math.max(width, needed, heading?.names.length ?? 0), needed, firstDataLine: head[first]!.line, ...pace(times) };
+}
+
+/** Rows just above the first reading that have a time already belong to the table: its thermocouples were still open. */
+function firstRow(rows: readonly (readonly string[])[], time: TimeColumn, firstReading: number): number {
+  let first = firstReading;
+  while (first > 0 && (readRowTime(rows[first - 1]!, time, '.') ?? readRowTime(rows[first - 1]!, time, ',')) !== null) first -= 1;
+  return first;
+}
+
+/** The commonest number of cells; one row with a cell too many does not make the others short. */
+function usualWidth(table: readonly (readonly string[])[]): number {
+  const counts = new Map<number, number>();
+  for (const row of table) counts.set(row.length, (counts.get(row.length) ?? 0) + 1);
+  return [...counts.entries()].reduce((best, each) => (each[1] > best[1] ? each : best))[0];
 }
 
 interface Heading {

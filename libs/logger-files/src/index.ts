@@ -1,0 +1,11 @@
+export { shareAbove } from './channel-tally.js';
+export { createLoggerReader, type LoggerReader } from './logger-reader.js';
+export type { ChannelRead, ChannelSummary, ChannelWithoutReadings, LoggerGap, LoggerPeak, LoggerRead, LoggerSummary, LoggerUnreadable, TimeAbove, UnreadableCode } from './logger-summary.js';
+export type { DecimalMark } from './number-cell.js';
+export { OutOfRangeError } from './out-of-range-error.js';
+export { KEPT_OF_EACH_KIND, type Problem, type ProblemCode } from './problem-list.js';
+export { USUAL_LIMITS_C, type LoggerReaderOptions } from './reader-options.js';
+export { SEPARATORS, type Separator } from './row-cells.js';
+export { toCelsius, unitFromText, type TemperatureUnit } from './temperature-unit.js';
+export type { DateOrder } from './time-cell.js';
+export type { ElapsedUnit } from './find-time-column.js';
