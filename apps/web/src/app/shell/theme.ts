@@ -1,6 +1,7 @@
 import { useEffect } from 'react';
 import type { Preferences } from '@shared/session';
 
+/** `public/first.js` reads it before anything else runs */
 const KEPT = 'loopbay.theme';
 const show = (theme: Preferences['theme']) =>
   void document.body.classList.toggle('bp6-dark', theme === 'dark' || (theme === 'system' && window.matchMedia('(prefers-color-scheme: dark)').matches));
@@ -9,9 +10,6 @@ function lastTheme(): Preferences['theme'] {
   const kept = localStorage.getItem(KEPT);
   return kept === 'light' || kept === 'dark' ? kept : 'system';
 }
-
-/** Before it is known who sits there: the theme this device showed last, so that a dim bay sees no white flash. */
-export const showLastTheme = (): void => show(lastTheme());
 
 /** Puts the theme on the page: the device's own, or the one that is forced. Without one, what this device showed last. */
 export function useTheme(wanted?: Preferences['theme']): void {
