@@ -1,16 +1,7 @@
-import { RequestMethod } from '@nestjs/common';
-import { MetadataScanner, ModulesContainer } from '@nestjs/core';
 import { may, ROLES, type Permission, type Role } from '@shared/roles';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { NEEDS, type Needed } from '../src/auth/needs.js';
+import { handlersOf, type Handler } from './handlers.js';
 import { Person, openTestShop, type TestShop } from './test-app.js';
-
-interface Handler {
-  readonly method: string;
-  readonly path: string;
-  readonly needs: Needed | undefined;
-  readonly name: string;
-}
 
 let shop: TestShop;
 let handlers: Handler[];
@@ -25,25 +16,6 @@ afterAll(() => shop.close());
 async function someCustomer(): Promise<string> {
   const counter = await shop.person(['counter']);
   return (await counter.post('/api/customers', { name: 'Someone', email: 'someone@shop.test' }).expect(201)).body.id as string;
-}
-
-/** Every handler of every controller, with what it says it needs. */
-function handlersOf({ app }: TestShop): Handler[] {
-  const scanner = new MetadataScanner();
-  const found: Handler[] = [];
-  for (const module of app.get(ModulesContainer).values()) {
-    for (const { instance, metatype } of module.controllers.values()) {
-      const base = Reflect.getMetadata('path', metatype as object) as string;
-      for (const name of scanner.getAllMethodNames(Object.getPrototypeOf(instance) as object)) {
-        const handler = (instance as Record<string, object>)[name]!;
-        const path = Reflect.getMetadata('path', handler) as string | undefined;
-        if (path === undefined) continue;
-        const method = RequestMethod[Reflect.getMetadata('method', handler) as number]!.toLowerCase();
-        found.push({ method, path: `/api/${base}/${path}`.replace(/\/+/g, '/').replace(/\/$/, ''), needs: Reflect.getMetadata(NEEDS, handler) as Needed | undefined, name: `${(metatype as { name: string }).name}.${name}` });
-      }
-    }
-  }
-  return found;
 }
 
 const filled = (path: string) => path.replace(/:(number)/g, 'J2026-9999').replace(/:version/g, '999').replace(/:code/g, 'AAAA-BBBB-CCCC').replace(/:\w+/g, '01900000-0000-7000-8000-000000000000');

@@ -19,8 +19,8 @@ export interface Sent {
 }
 
 /** Requests byte for byte as written: no address is tidied up, no header is added but what a browser of ours would send. */
-export async function openWire(shop: TestShop) {
-  await shop.app.listen(0, '127.0.0.1');
+export async function openWire(shop: TestShop, { listening = false } = {}) {
+  if (!listening) await shop.app.listen(0, '127.0.0.1');
   const { port } = shop.app.getHttpServer().address() as AddressInfo;
   const agent = new Agent({ keepAlive: true, maxSockets: 12 });
   const send = (by: Person | null, { method, path, body, headers = {} }: Sent) =>

@@ -36,4 +36,7 @@ export function toInvoiceView(row: InvoiceRow): InvoiceView {
   return { ...row, overdue: row.overdue === 1, lines, taxSummary: [...taxSummaryOf(lines)], payments: JSON.parse(row.payments) as InvoiceView['payments'] };
 }
 
+/** As its customer sees it: who of the shop wrote a transfer or cash down is the shop's own. */
+export const invoiceForCustomer = (view: InvoiceView): InvoiceView => ({ ...view, payments: view.payments.map((payment) => ({ ...payment, recordedBy: payment.kind === 'card' ? payment.recordedBy : '' })) });
+
 export const toInvoiceListRow = (row: Omit<InvoiceListRow, 'overdue'> & { overdue: number }): InvoiceListRow => ({ ...row, overdue: row.overdue === 1 });

@@ -7,7 +7,7 @@ import { CONFIG, type Config } from '../config/config.js';
 import type { QuerySource } from '../database/query-source.js';
 import { ReadDb } from '../database/read-db.js';
 import { notFound } from '../http/app-error.js';
-import { INVOICE_COUNT, INVOICE_ROW_SELECT, INVOICE_SELECT, toInvoiceListRow, toInvoiceView, type InvoiceListRow, type InvoiceRow } from './invoice-view.js';
+import { INVOICE_COUNT, INVOICE_ROW_SELECT, INVOICE_SELECT, invoiceForCustomer, toInvoiceListRow, toInvoiceView, type InvoiceListRow, type InvoiceRow } from './invoice-view.js';
 
 export interface InvoicePage {
   rows: InvoiceListRow[];
@@ -59,6 +59,6 @@ export class InvoicesService {
   async ofCustomer(actor: Actor, invoiceId: string): Promise<InvoiceView> {
     const row = await this.db.one<InvoiceRow>(`${INVOICE_SELECT} WHERE i.id = :invoiceId AND i.customerId = :customerId`, [{ today: this.today(), invoiceId, customerId: actor.customerId }]);
     if (!row) throw notFound('invoice');
-    return toInvoiceView(row);
+    return invoiceForCustomer(toInvoiceView(row));
   }
 }

@@ -88,10 +88,10 @@ export class PapersService implements OnApplicationShutdown {
     );
   }
 
-  /** The bytes of a paper; for a customer only their own, as if others did not exist. */
+  /** The bytes of a paper; for a customer only their own, as if others did not exist. The tag is the shop's own. */
   async bytes(paperId: string, customerId: string | null = null): Promise<{ name: string; bytes: Buffer }> {
     const row = await this.db.one<{ number: string; kind: string; customerId: string }>('SELECT number, kind, customerId FROM papers WHERE id = ?', [paperId]);
-    if (!row || (customerId !== null && row.customerId !== customerId)) throw notFound('paper');
+    if (!row || (customerId !== null && (row.customerId !== customerId || row.kind === 'tag'))) throw notFound('paper');
     return { name: `${row.kind}-${row.number}.pdf`, bytes: await this.drawn(paperId) };
   }
 

@@ -10,6 +10,7 @@ import { AppError, changedMeanwhile, notFound } from '../http/app-error.js';
 import { requestContext } from '../http/request-context.js';
 import { Ids } from '../ids/ids.js';
 import { Invoice } from '../invoices/invoice.entity.js';
+import { invoiceForCustomer } from '../invoices/invoice-view.js';
 import { InvoicesService } from '../invoices/invoices.service.js';
 import { CheckoutAttempt } from './checkout-attempt.entity.js';
 import { PaymentBookService } from './payment-book.service.js';
@@ -108,7 +109,7 @@ export class CheckoutService {
     if (!invoice) throw notFound('invoice');
     const balanceMinor = invoice.grossMinor - (await this.book.paidMinor(manager, invoiceId));
     if (balanceMinor <= 0) throw new AppError('ALREADY_DONE', 'This invoice is paid. Nothing more is needed.');
-    if (invoice.version !== version) throw changedMeanwhile('invoice', await this.invoices.viewIn(manager, invoiceId));
+    if (invoice.version !== version) throw changedMeanwhile('invoice', invoiceForCustomer(await this.invoices.viewIn(manager, invoiceId)));
     const [last] = await manager.find(CheckoutAttempt, { where: { invoiceId }, order: { attempt: 'DESC' }, take: 1 });
     if (last && (last.state === 'asked' || last.state === 'open')) return { attempt: last, invoiceNumber: invoice.number, balanceMinor };
     const attempt: CheckoutAttempt = {

@@ -16,7 +16,7 @@ import { ShopService } from '../shop/shop.service.js';
 import { addresseeOf } from './addressee.js';
 import { approvalProblem } from './approval-rules.js';
 import { isDoneAlready, isExpired, moveRefusal, nextQuoteState, type QuoteAct } from './quote-state.js';
-import { QUOTE_SELECT, toQuoteView, type QuoteRow } from './quote-view.js';
+import { QUOTE_SELECT, quoteForCustomer, toQuoteView, type QuoteRow } from './quote-view.js';
 import { Quote } from './quote.entity.js';
 import { QuotesService } from './quotes.service.js';
 
@@ -47,7 +47,7 @@ export class QuoteAnswersService {
   async ofCustomer(actor: Actor, quoteId: string): Promise<QuoteView> {
     const row = await this.db.one<QuoteRow>(`${QUOTE_SELECT} WHERE q.id = ? AND q.customerId = ? AND q.state <> 'draft'`, [quoteId, actor.customerId]);
     if (!row) throw notFound('quote');
-    return toQuoteView(row, this.quotes.today());
+    return quoteForCustomer(toQuoteView(row, this.quotes.today()));
   }
 
   async approveForCustomer(actor: Actor, quoteId: string, input: ApproveForCustomer): Promise<QuoteView> {
@@ -83,15 +83,15 @@ export class QuoteAnswersService {
   private async ownForAnswer(manager: EntityManager, actor: Actor, quoteId: string, version: number, act: QuoteAct): Promise<Quote> {
     const quote = await manager.findOneBy(Quote, { id: quoteId, customerId: actor.customerId ?? '' });
     if (!quote || quote.state === 'draft') throw notFound('quote');
-    await this.refuseUnlessOpen(manager, quote, version, act);
+    await this.refuseUnlessOpen(manager, quote, version, act, quoteForCustomer);
     if (act === 'approve' && isExpired(quote.validUntil, this.quotes.today())) throw new AppError('STATE_NOT_RIGHT', 'This quote is past its last day. Ask the shop to renew it; nothing you typed is lost.');
     return quote;
   }
 
   /** How it stands comes first, since it says more than that something changed. */
-  private async refuseUnlessOpen(manager: EntityManager, quote: Quote, version: number, act: QuoteAct): Promise<void> {
+  private async refuseUnlessOpen(manager: EntityManager, quote: Quote, version: number, act: QuoteAct, seen: (view: QuoteView) => QuoteView = (view) => view): Promise<void> {
     if (!nextQuoteState(quote.state, act)) throw new AppError(isDoneAlready(quote.state, act) ? 'ALREADY_DONE' : 'STATE_NOT_RIGHT', moveRefusal(quote.state, act));
-    if (quote.version !== version) throw changedMeanwhile('quote', await this.quotes.viewIn(manager, quote.id));
+    if (quote.version !== version) throw changedMeanwhile('quote', seen(await this.quotes.viewIn(manager, quote.id)));
   }
 
   private async approve(manager: EntityManager, actor: Actor, quote: Quote, approval: Approval): Promise<void> {

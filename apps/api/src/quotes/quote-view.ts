@@ -43,6 +43,9 @@ export const QUOTE_ROW_SELECT = `SELECT q.id, q.number, q.revision, q.jobId, j.n
 
 export type MoneyLineView = QuoteLine & { netMinor: number; taxMinor: number };
 
+/** As its customer sees it: what they said on the phone it may cost at most is for the shop to know. */
+export const quoteForCustomer = (view: QuoteView): QuoteView => (view.approval ? { ...view, approval: { ...view.approval, notToExceedMinor: null } } : view);
+
 export function toQuoteView(row: QuoteRow, today: string): QuoteView {
   const { lines: json, approvedHow, approvedBy, approvedAt, purchaseOrder, notToExceedMinor, ...rest } = row;
   const lines = JSON.parse(json) as MoneyLineView[];
