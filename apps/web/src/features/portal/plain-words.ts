@@ -40,15 +40,19 @@ const ENDS = {
   replaced: 'It was replaced by another machine, as agreed.',
   scrapped: 'It was scrapped, as agreed.',
 } as const;
+const SEE_QUOTE = 'We have looked at everything. Open it to see how its quote stands.';
 const QUOTE_COMES = 'We have looked at everything and prepare your quote.';
 const RESTS = 'The work rests at the moment. We call you when we need you; call us when you want to know more.';
 
 export const plainStep = (step: Step): string => NAMES[step];
 
-/** What happens to the machine right now, in one or two sentences. */
-export function happensNow({ step, state, quotes }: Pick<PortalJob, 'step' | 'state'> & { readonly quotes?: readonly Pick<PortalJob['quotes'][number], 'state'>[] }): string {
+type QuoteState = PortalJob['quotes'][number]['state'];
+
+/** What happens to the machine right now, in one or two sentences; with the states of its quotes, as far as they are known. */
+export function happensNow({ step, state }: Pick<PortalJob, 'step' | 'state'>, quotes: readonly QuoteState[] | 'unknown'): string {
   if (state === 'on-hold') return RESTS;
   if (state !== 'open') return ENDS[state];
-  if (step === 'awaiting-approval' && quotes && !quotes.some((q) => q.state === 'sent')) return quotes.some((q) => q.state === 'approved') ? 'We have your word and go on.' : QUOTE_COMES;
-  return NOW[step];
+  if (step !== 'awaiting-approval' || (quotes !== 'unknown' && quotes.includes('sent'))) return NOW[step];
+  if (quotes === 'unknown') return SEE_QUOTE;
+  return quotes.includes('approved') ? 'We have your word and go on.' : QUOTE_COMES;
 }

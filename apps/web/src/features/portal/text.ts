@@ -100,7 +100,7 @@ export const t = defineText({
   due: 'to be paid by {day}',
   pay: 'Pay {money}',
   payWords: 'You pay on the page of our payment service and come back here.',
-  payDemo: 'This is a demo: nothing is charged. The card 4242 4242 4242 4242 pays, 4000 0000 0000 0002 is declined.',
+  payDemo: 'This is a demo: no money moves, and the payment page offers test cards.',
   payOther: 'You may also pay by bank transfer; the account stands on the invoice.',
   changed: 'The amount has changed meanwhile',
   changedWords: 'Look at it above, and pay again.',

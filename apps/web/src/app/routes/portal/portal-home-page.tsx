@@ -15,7 +15,7 @@ export function PortalHomePage() {
         <div className="stack">
           <PageHeader title={t('overview', { customer: data.customerName })} />
           <NextThing home={data} />
-          <JobList jobs={data.jobs} />
+          <JobList home={data} />
         </div>
       )}
     </Answer>

@@ -21,7 +21,7 @@ export function PortalJobPage() {
           <PageHeader title={data.machine} below={t('jobBelow', { number: data.number, day: dayOf(data.receivedAt) })} />
           <Panel title={t('now')}>
             <div className="stack">
-              <p className="lb-portal-now">{happensNow(data)}</p>
+              <p className="lb-portal-now">{happensNow(data, data.quotes.map((q) => q.state))}</p>
               {data.promisedOn && (data.state === 'open' || data.state === 'on-hold') && <p className="muted">{t('promised', { day: calendarDay(data.promisedOn) })}</p>}
             </div>
           </Panel>

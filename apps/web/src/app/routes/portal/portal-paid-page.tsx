@@ -42,21 +42,23 @@ function Outcome({ invoiceId, sessionId }: { readonly invoiceId: string; readonl
     void client.invalidateQueries({ queryKey: portalKeys.all, predicate: ({ queryKey }) => queryKey[1] !== 'payment-return' });
   }, [client, outcome, invoice]);
   return (
-    <Answer query={back}>
-      {(data) => (
-        <>
-          <div role="status">
-            <Said data={data} asking={stillAsks(updates)} onAgain={() => void back.refetch()} busy={back.isFetching} />
-          </div>
-          {data.outcome === 'not-paid' && data.invoice.balanceMinor > 0 && <PayButton invoice={data.invoice} />}
-          <p className="row">
-            <Link to={`/portal/invoices/${invoiceId}`}>{t('toInvoice')}</Link>
-            <Link to={`/portal/jobs/${data.invoice.jobId}`}>{t('toJob')}</Link>
-            <Link to="/portal">{t('toOverview')}</Link>
-          </p>
-        </>
-      )}
-    </Answer>
+    <>
+      <Answer query={back}>
+        {(data) => (
+          <>
+            <div role="status">
+              <Said data={data} asking={stillAsks(updates)} onAgain={() => void back.refetch()} busy={back.isFetching} />
+            </div>
+            {data.outcome === 'not-paid' && data.invoice.balanceMinor > 0 && <PayButton invoice={data.invoice} />}
+          </>
+        )}
+      </Answer>
+      <p className="row">
+        <Link to={`/portal/invoices/${invoiceId}`}>{t('toInvoice')}</Link>
+        {invoice && <Link to={`/portal/jobs/${invoice.jobId}`}>{t('toJob')}</Link>}
+        <Link to="/portal">{t('toOverview')}</Link>
+      </p>
+    </>
   );
 }
 

@@ -16,7 +16,7 @@ export function JobMoneyList({ job }: { readonly job: PortalJob }) {
       ) : (
         <ul className="lb-portal-list">
           {job.invoices.map((invoice) => (
-            <li key={invoice.id} className="row spread">
+            <li key={invoice.id} className="lb-portal-line">
               <span className="row">
                 <Link to={`/portal/invoices/${invoice.id}`}>{t('invoice', { number: invoice.number })}</Link>
                 <StateMark {...invoiceStateWords(invoice)} />
@@ -25,7 +25,7 @@ export function JobMoneyList({ job }: { readonly job: PortalJob }) {
             </li>
           ))}
           {job.quotes.map((quote) => (
-            <li key={quote.id} className="row spread">
+            <li key={quote.id} className="lb-portal-line">
               <span className="row">
                 <Link to={`/portal/quotes/${quote.id}`}>{t('quote', { number: quote.number })}</Link>
                 <StateMark {...quoteStateWords(quote, today)} />
@@ -47,7 +47,7 @@ export function JobPapers({ job }: { readonly job: PortalJob }) {
       ) : (
         <ul className="lb-portal-list">
           {job.papers.map((paper) => (
-            <li key={paper.id} className="row spread">
+            <li key={paper.id} className="lb-portal-line">
               <a href={`/api/portal/papers/${paper.id}/pdf`} target="_blank" rel="noreferrer">
                 {t('paperPdf', { kind: paperName(paper.kind), number: paper.number })}
               </a>
