@@ -1,18 +1,11 @@
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
 import type { Entered } from '@shared/fields';
 import { bayViewSchema } from '@shared/instruments';
-import { jobSheetSchema } from '@shared/jobs';
 import { limitsVersionViewSchema, type LimitsSet } from '@shared/limits';
 import { recordListSchema, recordViewSchema, type ReadingsOf, type RecordKind, type RecordView } from '@shared/records';
 import { http } from './http.js';
 import { floorKeys } from './floor-queries.js';
 import { jobKeys } from './job-queries.js';
-
-/** What the bay's screens ask about a job; keys hang under the job's own, so that a change of it refreshes all. */
-export const jobSheetQuery = (jobId: string) => queryOptions({ queryKey: jobKeys.sheet(jobId), queryFn: ({ signal }) => http.get(`/jobs/${jobId}`, jobSheetSchema, { signal }) });
-
-export const jobRecordsQuery = (jobId: string) =>
-  queryOptions({ queryKey: jobKeys.records(jobId), queryFn: ({ signal }) => http.get(`/jobs/${jobId}/records`, recordListSchema, { signal }) });
 
 export const revisionsQuery = (recordId: string) =>
   queryOptions({ queryKey: ['records', recordId, 'revisions'], queryFn: ({ signal }) => http.get(`/records/${recordId}/revisions`, recordListSchema, { signal }) });

@@ -3,4 +3,6 @@ import type { RouteObject } from 'react-router-dom';
 export const bayRoutes: RouteObject[] = [
   { path: 'jobs/:id/work/core-test-before', lazy: () => import('./bay/core-test-page.js').then((m) => ({ Component: m.CoreTestBeforePage })) },
   { path: 'jobs/:id/work/core-test-after', lazy: () => import('./bay/core-test-page.js').then((m) => ({ Component: m.CoreTestAfterPage })) },
+  { path: 'jobs/:id/work/:kind', lazy: () => import('./bay/work-page.js').then((m) => ({ Component: m.WorkPage })) },
+  { path: 'records/:recordId/revisions', lazy: () => import('./bay/revisions-page.js').then((m) => ({ Component: m.RevisionsPage })) },
 ];

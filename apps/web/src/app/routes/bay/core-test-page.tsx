@@ -10,7 +10,8 @@ import { RECORD_FROM_STEP, type RecordView } from '@shared/records';
 import { useState } from 'react';
 import { useNavigate, useParams, useSearchParams } from 'react-router-dom';
 import { useTell } from '../../../components/toaster.js';
-import { bayQuery, jobRecordsQuery, jobSheetQuery, limitsQuery, recordsOfKind } from '../../../lib/job-records.js';
+import { jobRecordsQuery, jobSheetQuery } from '../../../lib/job-queries.js';
+import { bayQuery, limitsQuery, recordsOfKind } from '../../../lib/job-records.js';
 import { NotOpenYet } from './not-open-yet.js';
 
 export const CoreTestBeforePage = () => <CoreTestPage phase="before" />;
