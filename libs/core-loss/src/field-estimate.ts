@@ -1,7 +1,8 @@
 import { OutOfRangeError } from '@libs/quantities';
+import { builtCoreFieldAPerM, type StripSteel } from './strip-field.js';
 
 /** Steel whose field the planner can estimate. Built cores of the same grade differ more than grades do. */
-export type CoreSteel = 'typical';
+export type CoreSteel = 'typical' | StripSteel;
 
 /** A built core takes between these shares of the estimate: good steel well pressed, or old and strained. */
 export const FIELD_BAND = { low: 0.7, high: 2 } as const;
@@ -24,11 +25,13 @@ const MOST_T = 1.6;
 /**
  * Estimate of the rms field that a built core takes: for choosing turns, cable and supply, never for judging.
  *
- * `ln H` runs straight between the measured points; below the first one H is proportional to B.
+ * `ln H` runs straight between the measured points; below the first one H is proportional to B. For a steel that is named, the field
+ * of its strip is raised to that of a built core (`builtCoreFieldAPerM`).
  *
  * | symbol | argument | unit | range |
  * |---|---|---|---|
  * | B | `fluxT` | T | 0.1 to 1.6 |
+ * | – | `steel` | – | `'typical'` when left out: a measured stack of good steel |
  *
  * @returns H rms in A/m; expect 0.7 to 2 times that (`FIELD_BAND`)
  * @throws OutOfRangeError outside 0.1 to 1.6 T, where saturation makes any estimate worthless
@@ -38,10 +41,11 @@ const MOST_T = 1.6;
  * hRmsEstimate(1.2994)
  * // → 329.8
  */
-export function hRmsEstimate(fluxT: number): number {
+export function hRmsEstimate(fluxT: number, steel: CoreSteel = 'typical'): number {
   if (!(Number.isFinite(fluxT) && fluxT >= LEAST_T && fluxT <= MOST_T)) {
     throw new OutOfRangeError('fluxT', 'The field can be estimated from 0.1 to 1.6 T.');
   }
+  if (steel !== 'typical') return builtCoreFieldAPerM(fluxT, steel);
   const above = BUILT_CORE.findIndex(([t]) => t >= fluxT);
   const [t2, h2] = BUILT_CORE[above] ?? BUILT_CORE[BUILT_CORE.length - 1]!;
   const below = BUILT_CORE[above - 1];

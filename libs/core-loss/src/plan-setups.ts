@@ -11,6 +11,7 @@ export interface SetupRequest {
   frequencyHz: number;
   supplies: readonly Supply[];
   cables: readonly Cable[];
+  /** The steel of the sheets where it is known; a measured stack of good steel when left out. */
   steel?: CoreSteel;
   /** Turns that already lie in the core: kept when they will do. */
   turnsWound?: number;
@@ -59,16 +60,16 @@ const positive = (value: number, field: string) => {
 function prepare(request: SetupRequest): Plan {
   const derived = deriveGeometry(request.geometry);
   positive(request.frequencyHz, 'frequencyHz');
-  hRmsEstimate(request.targetT); // refuses a target that no estimate covers
-  const { measured } = request;
+  const { measured, steel } = request;
+  hRmsEstimate(request.targetT, steel); // refuses a target that no estimate covers
   if (measured) positive(measured.fieldRmsAPerM, 'fieldRmsAPerM');
-  const scale = measured ? measured.fieldRmsAPerM / hRmsEstimate(measured.fluxDensityT) : 1;
+  const scale = measured ? measured.fieldRmsAPerM / hRmsEstimate(measured.fluxDensityT, steel) : 1;
   return {
     request,
     derived,
     room: measured ? ROOM_MEASURED : ROOM_ESTIMATED,
     band: measured ? MEASURED_BAND : FIELD_BAND,
-    fieldAt: (fluxT) => hRmsEstimate(fluxT) * scale,
+    fieldAt: (fluxT) => hRmsEstimate(fluxT, steel) * scale,
   };
 }
 
