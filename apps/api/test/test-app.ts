@@ -1,6 +1,7 @@
 import { Test } from '@nestjs/testing';
 import type { NestFastifyApplication } from '@nestjs/platform-fastify';
 import type { Role } from '@shared/roles';
+import type { Logger } from 'pino';
 import request from 'supertest';
 import { AppModule } from '../src/app.module.js';
 import { house } from '../src/auth/actor.js';
@@ -8,6 +9,7 @@ import { Clock, SteppingClock } from '../src/clock/clock.js';
 import type { Config } from '../src/config/config.js';
 import { migrate } from '../src/database/migrate.js';
 import { UnitOfWork } from '../src/database/unit-of-work.js';
+import { PinoNestLogger } from '../src/http/logger.js';
 import { createAdapter, setup } from '../src/http/setup.js';
 import { Ids } from '../src/ids/ids.js';
 import { Mailer, type OutgoingMail } from '../src/outbox/mailer.js';
@@ -95,7 +97,7 @@ export interface TestShop {
 }
 
 /** The whole application on a database file of its own, with a clock that is told what time it is and mail that is kept. */
-export async function openTestShop(more: Partial<Config> = {}): Promise<TestShop> {
+export async function openTestShop(more: Partial<Config> = {}, logger?: Logger): Promise<TestShop> {
   process.env['GRACE_MS'] = '100';
   const { dataDir, remove } = temporaryDataDir();
   const config = testConfig(dataDir, more);
@@ -108,7 +110,7 @@ export async function openTestShop(more: Partial<Config> = {}): Promise<TestShop
     .overrideProvider(Mailer)
     .useValue(mail)
     .compile();
-  const app = module.createNestApplication<NestFastifyApplication>(createAdapter(false), { rawBody: true, logger: false });
+  const app = module.createNestApplication<NestFastifyApplication>(createAdapter(logger ?? false), { rawBody: true, logger: logger ? new PinoNestLogger(logger) : false });
   await setup(app, config);
   await app.init();
   await app.getHttpAdapter().getInstance().ready();

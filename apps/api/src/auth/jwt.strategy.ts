@@ -5,7 +5,7 @@ import type { FastifyRequest } from 'fastify';
 import { Strategy } from 'passport-jwt';
 import { CONFIG, type Config } from '../config/config.js';
 import type { Actor } from './actor.js';
-import { SESSION_COOKIE, TOKEN_AUDIENCE, TOKEN_ISSUER } from './session-cookie.js';
+import { isSecure, sessionCookie, TOKEN_AUDIENCE, TOKEN_ISSUER } from './session-cookie.js';
 import { SessionsService } from './sessions.service.js';
 
 /** A KeyObject: with a bare string each check would first try to read it as a public key, which is slow. */
@@ -17,8 +17,9 @@ export class JwtStrategy extends PassportStrategy(Strategy) {
     @Inject(CONFIG) config: Config,
     private readonly sessions: SessionsService,
   ) {
+    const cookie = sessionCookie(isSecure(config.publicUrl));
     super({
-      jwtFromRequest: (request: unknown) => (request as FastifyRequest).cookies[SESSION_COOKIE] ?? null,
+      jwtFromRequest: (request: unknown) => (request as FastifyRequest).cookies[cookie] ?? null,
       secretOrKey: jwtKey(config) as unknown as string,
       algorithms: ['HS256'],
       issuer: TOKEN_ISSUER,

@@ -5,7 +5,7 @@ import type { FastifyReply, FastifyRequest } from 'fastify';
 import { CONFIG, type Config } from '../config/config.js';
 import type { Actor } from './actor.js';
 import { CurrentActor, Needs } from './needs.js';
-import { clearSessionCookie, setSessionCookie } from './session-cookie.js';
+import { clearSessionCookie, isSecure, setSessionCookie } from './session-cookie.js';
 import { SessionsService } from './sessions.service.js';
 
 @ApiTags('session')
@@ -17,7 +17,7 @@ export class SessionController {
     private readonly sessions: SessionsService,
     @Inject(CONFIG) config: Config,
   ) {
-    this.secure = config.publicUrl.startsWith('https:');
+    this.secure = isSecure(config.publicUrl);
   }
 
   @Post()

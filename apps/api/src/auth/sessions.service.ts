@@ -1,4 +1,4 @@
-import { Inject, Injectable } from '@nestjs/common';
+import { Inject, Injectable, Logger } from '@nestjs/common';
 import { JwtService } from '@nestjs/jwt';
 import { permissionsOf, type Role } from '@shared/roles';
 import type { Me, Preferences, SignIn } from '@shared/session';
@@ -27,6 +27,8 @@ interface LiveSession {
 /** Sign-in, sign-out, and who stands behind a session right now. */
 @Injectable()
 export class SessionsService {
+  private readonly log = new Logger('SignIn');
+
   constructor(
     private readonly db: ReadDb,
     private readonly unitOfWork: UnitOfWork,
@@ -39,15 +41,13 @@ export class SessionsService {
   ) {}
 
   async signIn(input: SignIn, address: string): Promise<{ token: string; me: Me }> {
-    await this.brake.check(input.email, address);
+    await this.brake.step(input.email, address);
     const user = await this.db.one<{ id: string; passwordHash: string; disabledAt: string | null }>('SELECT id, passwordHash, disabledAt FROM users WHERE email = ?', [input.email]);
     const right = user ? await passwordMatches(user.passwordHash, input.password) : await decoyCheck(input.password);
-    if (!user || !right || user.disabledAt) {
-      await this.brake.wrong(input.email, address);
-      throw new AppError('WRONG_NAME_OR_PASSWORD', 'That e-mail and password do not go together.');
-    }
+    if (!user || !right || user.disabledAt) throw new AppError('WRONG_NAME_OR_PASSWORD', 'That e-mail and password do not go together.');
     await this.brake.right(input.email, address);
     const sessionId = await this.open(user.id);
+    this.log.log(`User ${user.id} signed in from ${address}`);
     const actor = await this.actorOf(sessionId);
     if (!actor) throw new AppError('WRONG_NAME_OR_PASSWORD', 'That e-mail and password do not go together.');
     return { token: this.tokenOf(sessionId), me: await this.me(actor) };
@@ -111,9 +111,8 @@ export class SessionsService {
   async assertSigning(actor: Actor, password: string): Promise<void> {
     const user = await this.db.one<{ email: string; passwordHash: string }>('SELECT email, passwordHash FROM users WHERE id = ?', [actor.userId]);
     if (!user) throw new AppError('NOT_SIGNED_IN', 'Sign in to go on.');
-    await this.brake.check(user.email, 'signing');
+    await this.brake.step(user.email, 'signing');
     if (await passwordMatches(user.passwordHash, password)) return this.brake.right(user.email, 'signing');
-    await this.brake.wrong(user.email, 'signing');
     throw new AppError('WRONG_SIGNATURE', 'That is not your password. Nothing was signed.', { fields: [{ path: 'password', code: 'wrong', message: 'That is not your password.' }] });
   }
 }

@@ -1,6 +1,7 @@
 import { Catch, HttpException, Logger, type ArgumentsHost, type ExceptionFilter } from '@nestjs/common';
 import type { ErrorBody, ErrorCode, FieldProblem } from '@shared/errors';
-import type { FastifyReply, FastifyRequest } from 'fastify';
+import type { FastifyReply } from 'fastify';
+import type { ActorRequest } from '../auth/needs.js';
 import { AppError } from './app-error.js';
 import { HTTP_STATUS } from './error-status.js';
 import { InputNotValid } from './schema.pipe.js';
@@ -15,6 +16,9 @@ const WORDS: Partial<Record<ErrorCode, string>> = {
   NOT_MULTIPART: 'Send the file as form data.',
   TOO_MANY_TRIES: 'Too many tries. Wait a minute, then try again.',
 };
+
+/** What a person should find in the log: somebody tries what they may not. */
+const WATCHED: ReadonlySet<ErrorCode> = new Set(['FORBIDDEN', 'CROSS_SITE_REQUEST', 'WRONG_NAME_OR_PASSWORD', 'WRONG_SIGNATURE', 'TOO_MANY_TRIES', 'SIGNATURE_NOT_VALID']);
 
 interface Answer {
   status: number;
@@ -31,10 +35,11 @@ export class ErrorFilter implements ExceptionFilter {
   private readonly log = new Logger('Refusal');
 
   catch(exception: unknown, host: ArgumentsHost): void {
-    const request = host.switchToHttp().getRequest<FastifyRequest>();
+    const request = host.switchToHttp().getRequest<ActorRequest>();
     const reply = host.switchToHttp().getResponse<FastifyReply>();
     const answer = this.answerFor(exception);
     if (answer.code === 'INTERNAL') this.log.error(exception instanceof Error ? exception : new Error(String(exception)));
+    if (WATCHED.has(answer.code)) this.log.warn(`${answer.code} ${request.method} ${request.url.split('?')[0]} from ${request.ip}, user ${request.user?.userId ?? 'none'}`);
     const { status, ...rest } = answer;
     const body = { statusCode: status, ...rest, requestId: request.id } as ErrorBody;
     void reply.status(status).header('content-type', 'application/json; charset=utf-8').header('cache-control', 'no-store').send(body);
@@ -59,7 +64,7 @@ export class ErrorFilter implements ExceptionFilter {
     const code = BY_STATUS[status];
     if (code) return { status, code, message: WORDS[code] ?? 'This was refused.' };
     if (status >= 400 && status < 500) return { status, code: 'INPUT_NOT_VALID', message: WORDS.INPUT_NOT_VALID! };
-    return { status: 500, code: 'INTERNAL', message: 'Something failed here, not with you. Nothing was half done; try again, and tell the shop the request number if it stays.' };
+    return { status: status === 503 ? 503 : 500, code: 'INTERNAL', message: 'Something failed here, not with you. Nothing was half done; try again, and tell the shop the request number if it stays.' };
   }
 }
 

@@ -2,12 +2,13 @@ import type { LoggerService } from '@nestjs/common';
 import { pino, type DestinationStream, type Logger } from 'pino';
 import { requestContext } from './request-context.js';
 
-/** One logger for requests and for the application: JSON lines, no secrets, no query strings. */
+/** One logger for requests and for the application: JSON lines in UTC, no secrets, no query strings, no rows. */
 export function createLogger(level: string, destination?: DestinationStream): Logger {
   return pino(
     {
       level,
-      redact: { paths: ['req.headers.cookie', 'req.headers.authorization', 'res.headers["set-cookie"]', '*.password', '*.secret'], censor: '[redacted]' },
+      timestamp: pino.stdTimeFunctions.isoTime,
+      redact: { paths: ['req.headers.cookie', 'req.headers.authorization', 'res.headers["set-cookie"]', '*.password', '*.secret', 'err.parameters', 'err.*.parameters'], censor: '[redacted]' },
       serializers: {
         req: (r: { method: string; url: string; ip: string }) => ({ method: r.method, url: r.url.split('?')[0], ip: r.ip }),
         res: (r: { statusCode: number }) => ({ statusCode: r.statusCode }),

@@ -11,6 +11,7 @@ import { FastifyAdapter, type NestFastifyApplication } from '@nestjs/platform-fa
 import { DocumentBuilder, SwaggerModule } from '@nestjs/swagger';
 import type { FastifyBaseLogger, FastifyReply, FastifyRequest, RawServerDefault } from 'fastify';
 import type { Logger } from 'pino';
+import { isSecure, sessionCookie } from '../auth/session-cookie.js';
 import type { Config } from '../config/config.js';
 import { answerNoAddress } from './no-address.js';
 import { requestContext } from './request-context.js';
@@ -82,12 +83,12 @@ export async function setup(app: NestFastifyApplication, config: Config): Promis
   await app.register(fastifyCookie);
   await app.register(fastifyHelmet, {
     contentSecurityPolicy: { useDefaults: false, directives: CSP },
-    strictTransportSecurity: config.publicUrl.startsWith('https:') ? { maxAge: 31_536_000 } : false,
+    strictTransportSecurity: isSecure(config.publicUrl) ? { maxAge: 31_536_000 } : false,
     referrerPolicy: { policy: 'same-origin' },
   });
   await app.register(fastifyMultipart, { limits: { fileSize: UPLOAD_LIMIT_BYTES, files: 1, fields: 10, fieldSize: 10_000 } });
   await app.register(fastifyCompress, { encodings: ['br', 'gzip'], threshold: 1024, customTypes: /^(application\/json|text\/(?!event-stream)[\w-]+|image\/svg\+xml)(;|$)/u });
-  const description = new DocumentBuilder().setTitle('Loopbay').setDescription('The shop’s API. Every message has one contract, shared with the screens.').setVersion('1').addCookieAuth('loopbay_sid').build();
+  const description = new DocumentBuilder().setTitle('Loopbay').setDescription('The shop’s API. Every message has one contract, shared with the screens.').setVersion('1').addCookieAuth(sessionCookie(isSecure(config.publicUrl))).build();
   SwaggerModule.setup('api/docs', app, () => SwaggerModule.createDocument(app, description), { jsonDocumentUrl: 'api/docs-json' });
   if (config.webRoot && existsSync(join(config.webRoot, 'index.html'))) await serveWeb(app, config.webRoot);
   app.enableShutdownHooks([], { useProcessExit: true });
