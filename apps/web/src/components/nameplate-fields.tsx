@@ -2,8 +2,8 @@ import { get, useFormState, type Control, type FieldPath, type FieldValues } fro
 import { CONNECTION_OPTIONS, KIND_OPTIONS } from '../lib/machine-words.js';
 import { defineText } from '../lib/text.js';
 import { CheckField, SelectField, TextField } from './fields.js';
+import { Fold } from './fold.js';
 import { QuantityField } from './quantity-field.js';
-import './nameplate-fields.css';
 
 const t = defineText({
   description: 'What it is',
@@ -80,10 +80,9 @@ export function NameplateFields<F extends FieldValues>({ control, at, folded = f
       </div>
       <CheckField control={control} name={name('explosiveAtmosphere')} label={t('explosiveAtmosphere')} help={t('explosiveHelp')} />
       {folded ? (
-        <details className="lb-fold" open={wrongBelow || undefined}>
-          <summary>{t('more')}</summary>
+        <Fold summary={t('more')} open={wrongBelow}>
           {rest}
-        </details>
+        </Fold>
       ) : (
         rest
       )}

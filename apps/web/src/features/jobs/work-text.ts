@@ -112,6 +112,7 @@ export const t = defineText({
   certificate: 'Certificate',
   certificateIssue: 'Issue the certificate',
   certificateReplace: 'Issue a new certificate',
+  certificateReplaceAsk: 'Something on it is wrong?',
   certificateInForce: 'Certificate {number} is in force.',
   certificateNone: 'No certificate is issued yet.',
   certificateNotYet: 'It can be issued once the job is ready.',

@@ -4,6 +4,7 @@ import { issueCertificateSchema, type IssueCertificate } from '@shared/papers';
 import { hasReached } from '@shared/route';
 import { useForm } from 'react-hook-form';
 import { ChoiceField, TextField } from '../../../components/fields.js';
+import { Fold } from '../../../components/fold.js';
 import { ErrorNotice } from '../../../components/notices.js';
 import { Panel } from '../../../components/panel.js';
 import { useTell } from '../../../components/toaster.js';
@@ -31,16 +32,21 @@ export function CertificatePanel({ job }: { readonly job: JobSheet }) {
     <Panel title={<span id="certificate">{t('certificate')}</span>}>
       <div className="stack">
         {inForce ? (
-          <p>
-            {t('certificateInForce', { number: inForce.number })}{' '}
-            <a href={`/api/papers/${inForce.id}/pdf`} target="_blank" rel="noreferrer">
+          <div className="row">
+            <span>{t('certificateInForce', { number: inForce.number })}</span>
+            <a className="lb-number" href={`/api/papers/${inForce.id}/pdf`} target="_blank" rel="noreferrer">
               {t('issuedOpen', { number: inForce.number })}
             </a>
-          </p>
+          </div>
         ) : (
           <p>{reached ? t('certificateNone') : t('certificateNotYet')}</p>
         )}
-        {mayIssue && reached && <IssueForm key={inForce?.id ?? 'first'} job={job} replaces={inForce?.number ?? null} />}
+        {mayIssue && reached && !inForce && <IssueForm job={job} replaces={null} />}
+        {mayIssue && reached && inForce && (
+          <Fold key={inForce.id} summary={t('certificateReplaceAsk')}>
+            <IssueForm job={job} replaces={inForce.number} />
+          </Fold>
+        )}
       </div>
     </Panel>
   );

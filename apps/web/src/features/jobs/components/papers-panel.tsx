@@ -33,12 +33,12 @@ export function PapersPanel({ job }: { readonly job: JobSheet }) {
     <Panel title={t('papers')} actions={<Button text={t('printTag')} loading={print.isPending} onClick={() => print.mutate()} />}>
       <ErrorNotice error={print.error} />
       {print.data && (
-        <p role="status">
-          {t('tagReady')}{' '}
+        <div role="status" className="row">
+          <span>{t('tagReady')}</span>
           <a className="lb-number" href={`/api/papers/${print.data.paperId}/pdf`} target="_blank" rel="noreferrer">
             {t('openTag')}
           </a>
-        </p>
+        </div>
       )}
       {job.papers.length === 0 ? <Empty title={t('noPapers')} /> : <DataTable caption={t('papers')} columns={COLUMNS} rows={[...job.papers].reverse()} rowKey={(p) => p.id} />}
     </Panel>

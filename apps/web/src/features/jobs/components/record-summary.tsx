@@ -16,7 +16,7 @@ export function RecordSummary({ record, numbered }: { readonly record: RecordVie
   return (
     <article className="lb-record">
       <header>
-        <h4>{numbered ? t('ordinal', { name: recordName(record.kind), n: record.ordinal }) : recordName(record.kind)}</h4>
+        <h3>{numbered ? t('ordinal', { name: recordName(record.kind), n: record.ordinal }) : recordName(record.kind)}</h3>
         {isVerdict(record.verdict) && <VerdictTag verdict={record.verdict} />}
       </header>
       {figures.length > 0 && (

@@ -5,6 +5,7 @@ import { useState } from 'react';
 import { useForm } from 'react-hook-form';
 import { ConfirmDialog } from '../../../components/confirm-dialog.js';
 import { SelectField, TextAreaField } from '../../../components/fields.js';
+import { Fold } from '../../../components/fold.js';
 import { checked, showServerProblems } from '../../../lib/form-problems.js';
 import { useMay } from '../../../lib/me.js';
 import { useAskWaiver, useCountersign } from '../api/job-changes.js';
@@ -25,16 +26,13 @@ export function WaiverPanel({ job, testMade }: { readonly job: JobSheet; readonl
   if (!waiver) {
     if (testMade || !mayAsk) return null;
     return (
-      <div className="lb-waiver">
-        <details className="lb-fold">
-          <summary>{t('waiver')}</summary>
-          <div className="stack">
-            <p>{t('waiverWords')}</p>
-            <Button text={t('askWaiver')} onClick={() => setOpen('ask')} />
-          </div>
-        </details>
+      <>
+        <Fold summary={t('waiver')}>
+          <p>{t('waiverWords')}</p>
+          <Button text={t('askWaiver')} onClick={() => setOpen('ask')} />
+        </Fold>
         {open === 'ask' && <AskWaiverDialog jobId={job.id} onClose={close} />}
-      </div>
+      </>
     );
   }
   return (
