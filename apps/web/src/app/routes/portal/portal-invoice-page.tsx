@@ -1,9 +1,9 @@
-import { Callout } from '@blueprintjs/core';
 import type { InvoiceView } from '@shared/invoices';
 import { useQuery } from '@tanstack/react-query';
 import { Link, useParams } from 'react-router-dom';
 import { Answer } from '../../../components/faces.js';
 import { MoneyLines } from '../../../components/money-lines.js';
+import { Notice } from '../../../components/notice.js';
 import { PageHeader, Panel } from '../../../components/panel.js';
 import { StateMark } from '../../../components/state-mark.js';
 import { portalInvoiceQuery } from '../../../features/portal/api/portal-queries.js';
@@ -44,9 +44,9 @@ function Invoice({ invoice }: { readonly invoice: InvoiceView }) {
         </Panel>
       ) : (
         <>
-          <Callout intent="success" title={t('paidTitle')}>
+          <Notice intent="success" title={t('paidTitle')}>
             <p>{t('paidWords')}</p>
-          </Callout>
+          </Notice>
           <Panel title={t('payments')}>
             <PaymentLines invoice={invoice} />
           </Panel>

@@ -1,9 +1,10 @@
-import { Button, Callout, Spinner } from '@blueprintjs/core';
+import { Button, Spinner } from '@blueprintjs/core';
 import { paymentReturnQuerySchema, type PaymentReturn } from '@shared/invoices';
 import { useQuery, useQueryClient } from '@tanstack/react-query';
 import { useEffect } from 'react';
 import { Link, useParams, useSearchParams } from 'react-router-dom';
 import { Answer, Empty } from '../../../components/faces.js';
+import { Notice } from '../../../components/notice.js';
 import { PageHeader } from '../../../components/panel.js';
 import { paymentReturnQuery, portalInvoiceQuery, portalKeys, stillAsks } from '../../../features/portal/api/portal-queries.js';
 import { PayButton } from '../../../features/portal/components/pay-button.js';
@@ -72,25 +73,25 @@ interface SaidProps {
 function Said({ data: { outcome, invoice }, asking, busy, onAgain }: SaidProps) {
   if (outcome === 'paid') {
     return (
-      <Callout intent="success" title={t('paidTitle')}>
+      <Notice intent="success" title={t('paidTitle')}>
         <p>{t('returnPaid', { money: moneyOf(invoice.paidMinor, invoice.currency), number: invoice.number })}</p>
         <p>{t('returnReceipt')}</p>
-      </Callout>
+      </Notice>
     );
   }
   if (outcome === 'not-paid') {
     return (
-      <Callout intent="warning" title={t('returnNotPaid')}>
+      <Notice intent="warning" title={t('returnNotPaid')}>
         <p>{t('returnNotPaidWords')}</p>
-      </Callout>
+      </Notice>
     );
   }
   return (
-    <Callout intent="warning" title={t('returnNotYet')}>
+    <Notice intent="warning" title={t('returnNotYet')}>
       <div className="stack">
         <p>{asking ? t('returnNotYetWords') : t('returnNotYetLater')}</p>
         {asking ? <Spinner size={24} /> : <div><Button text={t('returnAgain')} loading={busy} onClick={onAgain} /></div>}
       </div>
-    </Callout>
+    </Notice>
   );
 }

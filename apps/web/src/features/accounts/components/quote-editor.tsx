@@ -1,9 +1,10 @@
-import { Button, Callout } from '@blueprintjs/core';
+import { Button } from '@blueprintjs/core';
 import { saveQuoteSchema, quoteViewSchema, type QuoteView } from '@shared/quotes';
 import { useMemo, useState, type ReactNode } from 'react';
 import { useForm } from 'react-hook-form';
 import { DraftNotice, useDraft } from '../../../components/draft.js';
 import { TextAreaField, TextField } from '../../../components/fields.js';
+import { Notice } from '../../../components/notice.js';
 import { ConflictNotice, ErrorNotice } from '../../../components/notices.js';
 import { Panel } from '../../../components/panel.js';
 import { problemsOf, showProblems, showServerProblems } from '../../../lib/form-problems.js';
@@ -87,12 +88,12 @@ export function QuoteEditor({ quote, start, currency, draftKey, pending, error, 
         </div>
       </Panel>
       {gone ? (
-        <Callout intent="warning" role="alert" title={t('gone')}>
+        <Notice intent="warning" role="alert" title={t('gone')}>
           <div className="stack">
             <p>{t('goneWords')}</p>
             <div><Button text={t('see')} onClick={() => onGone?.(theirs)} /></div>
           </div>
-        </Callout>
+        </Notice>
       ) : theirs ? (
         <ConflictNotice differences={quoteDifferences(theirs, getValues())} onTakeTheirs={takeTheirs} onKeepMine={() => void handleSubmit((values) => send(values, theirs.version))()} />
       ) : (

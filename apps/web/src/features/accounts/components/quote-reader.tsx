@@ -1,7 +1,7 @@
-import { Callout } from '@blueprintjs/core';
 import type { QuoteView } from '@shared/quotes';
 import { useQuery } from '@tanstack/react-query';
 import { MoneyLines } from '../../../components/money-lines.js';
+import { Notice } from '../../../components/notice.js';
 import { Panel } from '../../../components/panel.js';
 import { jobSheetQuery } from '../../../lib/job-queries.js';
 import { useMay } from '../../../lib/me.js';
@@ -21,7 +21,7 @@ export function QuoteReader({ quote }: { readonly quote: QuoteView }) {
   return (
     <div className="stack">
       <QuoteAnswer quote={quote} />
-      {quote.state === 'sent' && quote.expired && <Callout intent="warning">{t('expiredWords')}</Callout>}
+      {quote.state === 'sent' && quote.expired && <Notice intent="warning">{t('expiredWords')}</Notice>}
       <Panel
         title={t('lines')}
         actions={

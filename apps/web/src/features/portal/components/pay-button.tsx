@@ -1,6 +1,7 @@
-import { Button, Callout } from '@blueprintjs/core';
+import { Button } from '@blueprintjs/core';
 import type { InvoiceView } from '@shared/invoices';
 import { useEffect } from 'react';
+import { Notice } from '../../../components/notice.js';
 import { ErrorNotice } from '../../../components/notices.js';
 import { moneyOf } from '../../../lib/format.js';
 import { ApiError } from '../../../lib/http.js';
@@ -27,9 +28,9 @@ export function PayButton({ invoice }: { readonly invoice: InvoiceView }) {
   return (
     <div className="stack">
       {changed ? (
-        <Callout intent="warning" role="alert" title={t('changed')}>
+        <Notice intent="warning" role="alert" title={t('changed')}>
           <p>{t('changedWords')}</p>
-        </Callout>
+        </Notice>
       ) : (
         <ErrorNotice error={checkout.error} />
       )}

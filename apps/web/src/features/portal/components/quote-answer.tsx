@@ -1,8 +1,9 @@
-import { Button, Callout } from '@blueprintjs/core';
+import { Button } from '@blueprintjs/core';
 import type { QuoteView } from '@shared/quotes';
 import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { Link } from 'react-router-dom';
+import { Notice } from '../../../components/notice.js';
 import { calendarDay, momentOf, moneyOf } from '../../../lib/format.js';
 import { portalJobQuery } from '../api/portal-queries.js';
 import { t } from '../text.js';
@@ -16,27 +17,27 @@ export function QuoteAnswer({ quote }: { readonly quote: QuoteView }) {
   if (state === 'superseded') return <Superseded quote={quote} />;
   if (state === 'approved' && approval) {
     return (
-      <Callout intent="success" title={t('approvedTitle')} role="status">
+      <Notice intent="success" title={t('approvedTitle')} role="status">
         <p>
           {t('approvedWords', { by: approval.by, when: momentOf(approval.at) })}
           {approval.purchaseOrder !== '' && ` ${t('approvedOrder', { number: approval.purchaseOrder })}`}
           {approval.notToExceedMinor !== null && ` ${t('approvedLimit', { money: moneyOf(approval.notToExceedMinor, quote.currency) })}`}
         </p>
-      </Callout>
+      </Notice>
     );
   }
   if (state === 'declined') {
     return (
-      <Callout intent="warning" title={t('declinedTitle')} role="status">
+      <Notice intent="warning" title={t('declinedTitle')} role="status">
         <p>{t('declinedWords', { reason: quote.declineReason ?? '' })}</p>
-      </Callout>
+      </Notice>
     );
   }
   if (quote.expired) {
     return (
-      <Callout intent="warning" title={t('expiredTitle')}>
+      <Notice intent="warning" title={t('expiredTitle')}>
         <p>{t('expiredWords', { day: calendarDay(quote.validUntil) })}</p>
-      </Callout>
+      </Notice>
     );
   }
   return <Buttons quote={quote} />;
@@ -60,7 +61,7 @@ function Superseded({ quote }: { readonly quote: QuoteView }) {
   const { data: job } = useQuery(portalJobQuery(quote.jobId));
   const newer = job?.quotes.filter((q) => q.number === quote.number && q.revision > quote.revision && q.state !== 'superseded').at(0);
   return (
-    <Callout intent="warning" title={t('supersededTitle')}>
+    <Notice intent="warning" title={t('supersededTitle')}>
       <div className="stack">
         <p>{newer || !job ? t('supersededWords') : t('supersededNone')}</p>
         {newer && (
@@ -69,6 +70,6 @@ function Superseded({ quote }: { readonly quote: QuoteView }) {
           </Link>
         )}
       </div>
-    </Callout>
+    </Notice>
   );
 }

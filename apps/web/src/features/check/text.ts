@@ -1,0 +1,25 @@
+import { defineText } from '../../lib/text.js';
+
+export const t = defineText({
+  title: 'Check a certificate',
+  words: 'The code stands on the certificate, under the square pattern. This page says whether the certificate is the shop’s own, and whether it is in force.',
+  code: 'Code of the certificate',
+  codeHelp: 'Four groups of four letters and digits.',
+  check: 'Check it',
+  needCode: 'Type the code as it stands on the certificate.',
+  shape: 'A code has letters and digits only, like 7KQ2-9M4X-H3WD-8RTP.',
+  another: 'Check another code',
+  inForce: 'This certificate is in force',
+  superseded: 'This certificate is out of force',
+  supersededWords: 'Certificate {number} has taken its place. Ask for that one.',
+  unknown: 'No certificate has this code',
+  unknownWords: 'Compare it with the certificate, letter by letter. If it stands there like that, ask the shop that is named on it.',
+  asked: 'Asked for {code}',
+  certificate: 'Certificate',
+  issued: 'Issued',
+  shop: 'Shop',
+  machine: 'Machine',
+  core: 'Core after the work',
+  noCore: 'no core test on it',
+  compare: 'Compare these with the paper you hold: a copied code does not make another paper true.',
+});
