@@ -1,6 +1,8 @@
 import type { RouteObject } from 'react-router-dom';
 
 export const bayRoutes: RouteObject[] = [
+  { path: 'bay', lazy: () => import('./bay/bay-page.js').then((m) => ({ Component: m.BayPage })) },
+  { path: 'bay/instruments', lazy: () => import('./bay/instruments-page.js').then((m) => ({ Component: m.InstrumentsPage })) },
   { path: 'jobs/:id/work/core-test-before', lazy: () => import('./bay/core-test-page.js').then((m) => ({ Component: m.CoreTestBeforePage })) },
   { path: 'jobs/:id/work/core-test-after', lazy: () => import('./bay/core-test-page.js').then((m) => ({ Component: m.CoreTestAfterPage })) },
   { path: 'jobs/:id/work/:kind', lazy: () => import('./bay/work-page.js').then((m) => ({ Component: m.WorkPage })) },

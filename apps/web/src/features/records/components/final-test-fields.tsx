@@ -95,7 +95,7 @@ function HighPotentialPanel({ context, readings, running, demanded }: PanelProps
           label={t('testSupply')}
           options={[
             { value: 'ac', label: t('ac') },
-            { value: 'dc', label: t('dc') },
+            { value: 'dc', label: t('dcVolts') },
           ]}
         />
         <YesNoField name="highPotential.held" label={t('held')} />

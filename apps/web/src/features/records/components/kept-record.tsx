@@ -61,7 +61,7 @@ export function KeptRecord({ job, record }: { readonly job: JobSheet; readonly r
           <ul className="lb-plain">
             {record.instruments.map((i) => (
               <li key={i.id}>
-                {t('instrumentLine', { tag: i.tag, description: i.description, calibrated: calendarDay(i.calibratedOn), due: calendarDay(i.dueOn) })}
+                {t('instrumentLine', { tag: i.tag, description: i.description, serial: i.serial, calibrated: calendarDay(i.calibratedOn), due: calendarDay(i.dueOn) })}
                 {i.overdueOnTheDay && <b className="lb-problem"> {t('instrumentOverdue')}</b>}
               </li>
             ))}

@@ -7,6 +7,7 @@ import { changesBetween } from '../reading-words.js';
 import { t } from '../text.js';
 import { nameOfInstruments } from './kept-record.js';
 import '../records.css';
+import '../../../components/data-table.css';
 
 /** Every revision of a record, youngest first: who, when, why, and what changed. */
 export function Revisions({ revisions }: { readonly revisions: readonly RecordView[] }) {

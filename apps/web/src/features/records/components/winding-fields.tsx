@@ -8,6 +8,7 @@ import { QuantityField } from '../../../components/quantity-field.js';
 import { asFoundIn, blankWire, differencesOf, type WindingValues } from '../winding-form.js';
 import { t } from '../text.js';
 import type { FieldsProps } from './record-form.js';
+import '../../../components/data-table.css';
 
 export const WindingAsFoundFields = (props: FieldsProps<'winding-as-found'>) => <WindingCard {...props} asFound={null} />;
 
@@ -112,7 +113,7 @@ function Differences({ rows }: { readonly rows: readonly WindingDifference[] | n
             <th scope="col">{t('item')}</th>
             <th scope="col">{t('asFound')}</th>
             <th scope="col">{t('asWound')}</th>
-            <th scope="col">{t('differences')}</th>
+            <th scope="col">{t('means')}</th>
           </tr>
         </thead>
         <tbody>
