@@ -12,6 +12,7 @@ export const t = defineText({
   tabWork: 'Work',
   tabPhotos: 'Photos and papers',
   tabHistory: 'History',
+  tabHistoryLong: 'History and messages',
   tabMoney: 'Money',
   // what stops it
   stopTitle: 'What stops this job',

@@ -158,6 +158,12 @@ export const t = defineText({
   liftEmpty: 'Say why.',
   lifted: 'Lifted by {who}, {when}: {reason}',
   managerOnly: 'A manager does this.',
+  // messages
+  messages: 'Messages to the customer',
+  noMessages: 'Nothing was sent yet.',
+  subject: 'Subject',
+  to: 'To',
+  when: 'When',
   // history
   historyEmpty: 'Nothing has happened yet.',
 });
@@ -204,3 +210,6 @@ const MATERIALS: Record<string, string> = {
   'new-laminations': 'new laminations',
 };
 export const plainWord = (word: string): string => MATERIALS[word] ?? word;
+
+const MESSAGE_STATES: Record<string, string> = { waiting: 'waits to be sent', sent: 'sent', 'given-up': 'could not be sent' };
+export const messageState = (state: string): string => MESSAGE_STATES[state] ?? state;

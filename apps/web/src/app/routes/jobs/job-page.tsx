@@ -11,6 +11,7 @@ import { CreditPanel } from '../../../features/jobs/components/credit-panel.js';
 import { FactsPanel } from '../../../features/jobs/components/facts-panel.js';
 import { HistoryPanel } from '../../../features/jobs/components/history-panel.js';
 import { JobHead } from '../../../features/jobs/components/job-head.js';
+import { MessagesPanel } from '../../../features/jobs/components/messages-panel.js';
 import { PapersPanel } from '../../../features/jobs/components/papers-panel.js';
 import { StepWork } from '../../../features/jobs/components/step-work.js';
 import { StopBox } from '../../../features/jobs/components/stop-box.js';
@@ -23,7 +24,7 @@ import './job-page.css';
 const TABS = [
   ['work', t('tabWork')],
   ['photos', t('tabPhotos')],
-  ['history', t('tabHistory')],
+  ['history', t('tabHistoryLong')],
   ['money', t('tabMoney')],
 ] as const;
 type Tab = (typeof TABS)[number][0];
@@ -40,6 +41,7 @@ function Sheet({ job }: { readonly job: JobSheet }) {
   const records = useQuery(jobRecordsQuery(job.id));
   const mayRecord = useMay('records.write');
   const mayMoney = useMay('quotes.read');
+  const mayMessages = useMay('messages.read');
   const tab = tabOf(params.get('tab'), mayMoney);
   const step = stepOf(params.get('step'), job);
   const recorded = new Set((records.data ?? []).map((r) => r.kind));
@@ -77,7 +79,12 @@ function Sheet({ job }: { readonly job: JobSheet }) {
             <PapersPanel job={job} />
           </div>
         )}
-        {tab === 'history' && <HistoryPanel jobId={job.id} />}
+        {tab === 'history' && (
+          <div className="stack">
+            <HistoryPanel jobId={job.id} />
+            {mayMessages && <MessagesPanel jobId={job.id} />}
+          </div>
+        )}
         {tab === 'money' && (
           <div className="stack">
             <CreditPanel job={job} />

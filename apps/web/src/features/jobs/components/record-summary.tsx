@@ -61,25 +61,27 @@ interface KindPanelProps {
   readonly records: readonly RecordView[];
   readonly mayRecord: boolean;
   readonly reached: boolean;
+  /** on a job that has ended a record is corrected, and none is made */
+  readonly ended: boolean;
 }
 
 /** All records of one kind, and the way to the place where they are made. */
-export function RecordsOfKind({ jobId, kind, records, mayRecord, reached }: KindPanelProps) {
+export function RecordsOfKind({ jobId, kind, records, mayRecord, reached, ended }: KindPanelProps) {
   const made = records.filter((r) => r.kind === kind).sort((a, b) => a.ordinal - b.ordinal);
   const isCoreTest = kind === 'core-test-before' || kind === 'core-test-after';
   const once = ONCE_A_JOB.includes(kind);
-  const words = isCoreTest ? t('bench') : made.length === 0 ? t('record', { name: recordName(kind) }) : once ? t('correct') : t('again', { name: recordName(kind) });
+  const words = isCoreTest && !ended ? t('bench') : made.length === 0 ? t('record', { name: recordName(kind) }) : once || ended ? t('correct') : t('again', { name: recordName(kind) });
   return (
     <section className="lb-records">
       {made.map((record) => (
         <RecordSummary key={record.id} record={record} numbered={made.length > 1} />
       ))}
-      {made.length === 0 && !mayRecord && kind !== 'core-repair' && (
+      {made.length === 0 && (!mayRecord || ended) && kind !== 'core-repair' && (
         <p className="muted">
           {recordName(kind)}: {t('noOne')}
         </p>
       )}
-      {mayRecord && reached && (
+      {mayRecord && reached && (made.length > 0 || !ended) && (
         <Link className={`lb-open-work${made.length === 0 && kind !== 'core-repair' ? ' lb-open-work-first' : ''}`} to={`/jobs/${jobId}/work/${kind}`}>
           {words}
         </Link>

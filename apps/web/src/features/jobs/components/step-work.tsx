@@ -30,7 +30,7 @@ export function StepWork({ job, step, records }: StepWorkProps) {
   if (step === 'ready' || step === 'released') return <GoingOut job={job} />;
   const reached = hasReached(job.route, job.step, step);
   const kinds = kindsAt(step, job, records);
-  const ofKind = (kind: RecordKind) => <RecordsOfKind key={kind} jobId={job.id} kind={kind} records={records} mayRecord={mayRecord && !isEnded(job)} reached={reached} />;
+  const ofKind = (kind: RecordKind) => <RecordsOfKind key={kind} jobId={job.id} kind={kind} records={records} mayRecord={mayRecord} ended={isEnded(job)} reached={reached} />;
   const work = (
     <Panel title={<span id="work">{`${t('work')}: ${stepName(step)}`}</span>}>
       <div className="stack">
