@@ -79,7 +79,7 @@ function stripPeak(fluxT: number, steel: StripSteel): number {
  * rings of one steel (pfyhr/statordata, MIT). Standing: points read, factors computed from one steel and carried over to the others.
  * @example
  * builtCoreFieldAPerM(1.32, 'M400-50A')
- * // → 314
+ * // → 312
  */
 export function builtCoreFieldAPerM(fluxT: number, steel: StripSteel): number {
   if (!(Number.isFinite(fluxT) && fluxT >= 0.1 && fluxT <= 1.6)) throw new OutOfRangeError('fluxT', 'The field can be estimated from 0.1 to 1.6 T.');
