@@ -1,7 +1,7 @@
 import { coreTestReadingsSchema } from '@shared/core-tests';
 import { describe, expect, it } from 'vitest';
 import { afterFromBefore, benchFrom, blankBench, readBench, type BenchValues } from './bench-form.js';
-import { sampleBefore } from './sample-job.fixture.js';
+import { sampleBefore } from '../../../test/sample-job.js';
 
 const typed = (text: string, system: 'si' | 'inch-pound' = 'si') => ({ text, system });
 const paths = (values: BenchValues) => readBench(values).problems.map((p) => p.path);

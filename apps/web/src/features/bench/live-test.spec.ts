@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { beforeRecord, beforeTestOf } from './before-test.js';
 import { afterFromBefore, blankBench, type BenchValues } from './bench-form.js';
 import { liveTest } from './live-test.js';
-import { keptTest, sampleBefore } from './sample-job.fixture.js';
+import { keptTest, sampleBefore } from '../../../test/sample-job.js';
 
 const typed = (text: string) => ({ text, system: 'si' as const });
 const before = beforeTestOf(keptTest('core-test-before', sampleBefore(12)));

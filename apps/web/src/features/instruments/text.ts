@@ -19,6 +19,7 @@ export const t = defineText({
   dueOn: 'Due on',
   certificateNumber: 'Certificate',
   standing: 'Standing',
+  errorTitle: 'Limits of error',
   error: '{reading} % of reading + {range} % of range',
   'in-calibration': 'in calibration',
   'due-soon': 'due soon',
@@ -31,7 +32,6 @@ export const t = defineText({
   choose: 'Choose the kind',
   tagHelp: 'As it stands on the instrument.',
   errorHelp: 'Limits of error as the maker states them.',
-  differsTheirs: 'As it stands now',
 });
 
 const KINDS: Record<InstrumentView['kind'], string> = {

@@ -2,6 +2,7 @@ import { defineText } from '../../lib/text.js';
 
 export const t = defineText({
   toJob: 'To the job {number}',
+  toRecord: 'To the record of {number}',
   save: 'Save',
   saveCorrection: 'Save the correction',
   saved: '{record} is kept.',

@@ -20,7 +20,7 @@ export function RevisionsPage() {
         <>
           <PageHeader
             title={`${t('revisionsTitle')} · ${recordName(all[0]!.kind)}`}
-            below={job.data && <Link to={`/jobs/${job.data.id}/work/${all[0]!.kind}`}>{t('toJob', { number: job.data.number })}</Link>}
+            below={job.data && <Link to={`/jobs/${job.data.id}/work/${all[0]!.kind}`}>{t('toRecord', { number: job.data.number })}</Link>}
           />
           <Revisions revisions={all} />
         </>

@@ -4,7 +4,7 @@ import userEvent from '@testing-library/user-event';
 import { createMemoryRouter, RouterProvider } from 'react-router-dom';
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import { meQuery } from '../../../lib/me.js';
-import { keptTest, sampleBefore, sampleJob, SAMPLE_BAY, SAMPLE_LIMITS, SAMPLE_TECHNICIAN, type SampleMachine } from '../sample-job.fixture.js';
+import { keptTest, sampleBefore, sampleJob, SAMPLE_BAY, SAMPLE_LIMITS, SAMPLE_TECHNICIAN, type SampleMachine } from '../../../../test/sample-job.js';
 import { Bench } from './bench.js';
 
 /** Readings of the invented sample shop: machine 12 after its burnout, and machine 2 after an oven that ran too hot. */

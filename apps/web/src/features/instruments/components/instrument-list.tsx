@@ -18,7 +18,7 @@ export function InstrumentList({ instruments, onEdit }: { readonly instruments: 
         { key: 'tag', title: t('tag'), cell: (i) => (onEdit ? <Button variant="minimal" text={i.tag} aria-label={t('edit', { tag: i.tag })} onClick={() => onEdit(i)} /> : <b>{i.tag}</b>) },
         { key: 'kind', title: t('kind'), cell: (i) => instrumentKindName(i.kind) },
         { key: 'description', title: t('description'), cell: (i) => [i.description, i.rangeText].filter(Boolean).join(', ') },
-        { key: 'error', title: t('errorHelp'), cell: (i) => t('error', { reading: i.percentOfReading, range: i.percentOfRange }) },
+        { key: 'error', title: t('errorTitle'), cell: (i) => t('error', { reading: i.percentOfReading, range: i.percentOfRange }) },
         { key: 'due', title: t('dueOn'), cell: (i) => <span className="num">{calendarDay(i.dueOn)}</span> },
         { key: 'certificate', title: t('certificateNumber'), cell: (i) => i.certificateNumber },
         { key: 'standing', title: t('standing'), cell: (i) => <CalibrationMark standing={i.standing} /> },
