@@ -3,7 +3,7 @@ import { limitsVersionsQuery, messagesQuery, usersQuery } from '../../features/s
 import { queryClient } from '../query-client.js';
 
 export const shopRoutes: RouteObject[] = [
-  { path: 'shop', loader: () => redirect('/shop/limits') },
+  { path: 'shop', loader: () => redirect('/shop/limits'), Component: () => null },
   { path: 'shop/limits', loader: () => (void queryClient.prefetchQuery(limitsVersionsQuery), null), lazy: () => import('./shop/limits-page.js').then((m) => ({ Component: m.LimitsPage })) },
   { path: 'shop/people', loader: () => (void queryClient.prefetchQuery(usersQuery), null), lazy: () => import('./shop/people-page.js').then((m) => ({ Component: m.PeoplePage })) },
   { path: 'shop/messages', loader: () => (void queryClient.prefetchQuery(messagesQuery), null), lazy: () => import('./shop/messages-page.js').then((m) => ({ Component: m.MessagesPage })) },
