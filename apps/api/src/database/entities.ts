@@ -1,9 +1,12 @@
 import { LimitsVersion } from '../acceptance/limits-version.entity.js';
 import { Attachment } from '../attachments/attachment.entity.js';
 import { Session } from '../auth/session.entity.js';
+import { BurnoutLoadJob } from '../burnouts/burnout-load-job.entity.js';
+import { BurnoutLoad } from '../burnouts/burnout-load.entity.js';
 import { Customer } from '../customers/customer.entity.js';
 import { HistoryEntry } from '../history/history-entry.entity.js';
 import { IdempotencyKey } from '../idempotency/idempotency-key.entity.js';
+import { OvenHistoryRow } from '../insight/oven-history.entity.js';
 import { Instrument } from '../instruments/instrument.entity.js';
 import { InvoiceLineRow } from '../invoices/invoice-line.entity.js';
 import { Invoice } from '../invoices/invoice.entity.js';
@@ -27,4 +30,5 @@ import { User } from '../users/user.entity.js';
 export const ENTITIES = [
   User, Session, Customer, Machine, Job, JobRecord, RecordRevision, SignOff, Attachment, Quote, QuoteLineRow, Invoice, InvoiceLineRow,
   Payment, CheckoutAttempt, PaymentEvent, Paper, Instrument, LimitsVersion, Setting, NumberSeries, OutboxItem, HistoryEntry, IdempotencyKey,
+  BurnoutLoad, BurnoutLoadJob, OvenHistoryRow,
 ];
