@@ -1,8 +1,9 @@
-import { Controller, Get, Param } from '@nestjs/common';
+import { Body, Controller, Get, Param, Post } from '@nestjs/common';
 import { ApiTags } from '@nestjs/swagger';
-import type { LimitsVersionView } from '@shared/limits';
+import { publishLimitsSchema, type LimitsComparison, type LimitsVersionView, type PublishLimits } from '@shared/limits';
 import { z } from 'zod';
-import { Needs } from '../auth/needs.js';
+import type { Actor } from '../auth/actor.js';
+import { CurrentActor, Needs } from '../auth/needs.js';
 import { AcceptanceService } from './acceptance.service.js';
 
 const versionParam = z.coerce.number().int().min(1).max(1_000_000);
@@ -22,5 +23,17 @@ export class AcceptanceController {
   @Needs('limits.read')
   version(@Param('version', { schema: versionParam }) version: number): Promise<LimitsVersionView> {
     return this.acceptance.version(version);
+  }
+
+  @Post()
+  @Needs('limits.publish')
+  publish(@CurrentActor() actor: Actor, @Body({ schema: publishLimitsSchema }) input: PublishLimits): Promise<LimitsVersionView> {
+    return this.acceptance.publish(actor, input);
+  }
+
+  @Get(':from/compare/:to')
+  @Needs('limits.read')
+  compare(@Param('from', { schema: versionParam }) from: number, @Param('to', { schema: versionParam }) to: number): Promise<LimitsComparison> {
+    return this.acceptance.compare(from, to);
   }
 }
