@@ -1,10 +1,11 @@
 import Database from 'better-sqlite3';
+import sharp from 'sharp';
 import { afterAll, afterEach, beforeAll, describe, expect, it, vi } from 'vitest';
 import { CustomersService } from '../src/customers/customers.service.js';
 import { databaseFile } from '../src/database/data-folder.js';
 import { UnitOfWork } from '../src/database/unit-of-work.js';
 import { HistoryService } from '../src/history/history.service.js';
-import { NEW_CUSTOMER } from './jobs-booking.js';
+import { bookedIn, NEW_CUSTOMER } from './jobs-booking.js';
 import { openTestShop, type Person, type TestShop } from './test-app.js';
 
 let shop: TestShop;
@@ -29,6 +30,21 @@ const onDisk = (name: string, key: string) => ({
   told: disk.prepare('SELECT COUNT(*) FROM history WHERE words LIKE ?').pluck().get(`%${name}%`),
   key: disk.prepare('SELECT COUNT(*) FROM idempotency_keys WHERE key = ?').pluck().get(key),
   answer: disk.prepare('SELECT body IS NOT NULL FROM idempotency_keys WHERE key = ?').pluck().get(key),
+});
+
+describe('a photo under a key', () => {
+  it('sent again is the same one; another photo under that key is refused, not dropped', async () => {
+    const { id } = await bookedIn(counter);
+    const picture = (width: number) => sharp({ create: { width, height: 8, channels: 3, background: '#b87333' } }).png().toBuffer();
+    const send = async (bytes: Buffer) => counter.post(`/api/jobs/${id}/attachments`).set('idempotency-key', 'photo-of-the-winding').attach('file', bytes, 'winding.png');
+    const first = await send(await picture(8));
+    expect(first.status).toBe(201);
+    const again = await send(await picture(8));
+    expect(again.body).toEqual(first.body);
+    const other = await send(await picture(640));
+    expect(other.body).toMatchObject({ statusCode: 422, code: 'IDEMPOTENCY_KEY_REUSED' });
+    expect(disk.prepare('SELECT COUNT(*) FROM attachments WHERE jobId = ?').pluck().get(id)).toBe(1);
+  });
 });
 
 describe('a request under a key, when the shop’s computer fails', () => {

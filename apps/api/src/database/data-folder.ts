@@ -7,9 +7,9 @@ export const papersDir = (dataDir: string) => join(dataDir, 'papers');
 
 export class DataFolderBusy extends Error {}
 
-/** Makes the data folder and takes it for this process; a second shop on the same folder is refused. */
+/** Makes the data folder, for the shop's own account alone, and takes it for this process; a second shop on the same folder is refused. */
 export function takeDataFolder(dataDir: string): { release(): void } {
-  for (const dir of [dataDir, uploadsDir(dataDir), papersDir(dataDir)]) mkdirSync(dir, { recursive: true });
+  for (const dir of [dataDir, uploadsDir(dataDir), papersDir(dataDir)]) mkdirSync(dir, { recursive: true, mode: 0o700 });
   const file = join(dataDir, 'loopbay.lock');
   const holder = liveHolder(file);
   if (holder) throw new DataFolderBusy(`The data folder is in use by another running shop (process ${holder}). Stop that one first.`);

@@ -42,8 +42,9 @@ export class IdempotencyInterceptor implements NestInterceptor {
   }
 
   private async once(context: ExecutionContext, next: CallHandler, request: RawBodyRequest<ActorRequest>, actorId: string, key: string): Promise<unknown> {
-    // over the bytes as they came: to write a body nested a hundred thousand deep once more would break
-    const hash = createHash('sha256').update(`${request.method} ${request.url}\n`).update(request.rawBody ?? '').digest('hex');
+    // over the bytes as they came: to write a body nested a hundred thousand deep once more would break; of a file, which goes
+    // straight to disk, its length
+    const hash = createHash('sha256').update(`${request.method} ${request.url}\n`).update(request.rawBody ?? request.headers['content-length'] ?? '').digest('hex');
     const name = `${actorId}|${key}`;
     const twin = this.running.get(name);
     if (twin) {
