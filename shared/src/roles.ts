@@ -39,6 +39,7 @@ export const PERMISSIONS = {
   'limits.publish': ['manager'],
   'instruments.read': ['technician', 'manager'],
   'instruments.edit': ['technician', 'manager'],
+  'equipment.edit': ['technician', 'manager'],
   'users.manage': ['manager'],
   'messages.read': ['counter', 'office', 'manager'],
   'history.read': ['counter', 'technician', 'office', 'manager'],

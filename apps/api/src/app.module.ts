@@ -9,6 +9,7 @@ import { ConfigModule } from './config/config.module.js';
 import type { Config } from './config/config.js';
 import { CustomersModule } from './customers/customers.module.js';
 import { DatabaseModule } from './database/database.module.js';
+import { EquipmentModule } from './equipment/equipment.module.js';
 import { HistoryModule } from './history/history.module.js';
 import { ErrorFilter } from './http/error.filter.js';
 import { HealthController } from './http/health.controller.js';
@@ -34,7 +35,7 @@ export class AppModule {
   static register(config: Config): DynamicModule {
     return {
       module: AppModule,
-      imports: [ConfigModule.register(config), ClockModule, DatabaseModule, HistoryModule, ShopModule, PapersModule, OutboxModule, AuthModule, UsersModule, AcceptanceModule, InstrumentsModule, RecordsModule, SignOffsModule, CertificatesModule, CustomersModule, MachinesModule, JobsModule, AttachmentsModule, SearchModule, QuotesModule, InvoicesModule, PaymentsModule, PortalModule],
+      imports: [ConfigModule.register(config), ClockModule, DatabaseModule, HistoryModule, ShopModule, PapersModule, OutboxModule, AuthModule, UsersModule, AcceptanceModule, EquipmentModule, InstrumentsModule, RecordsModule, SignOffsModule, CertificatesModule, CustomersModule, MachinesModule, JobsModule, AttachmentsModule, SearchModule, QuotesModule, InvoicesModule, PaymentsModule, PortalModule],
       controllers: [HealthController],
       providers: [
         { provide: APP_PIPE, useFactory: schemaPipe },

@@ -59,7 +59,7 @@ export class InstrumentsService {
     return {
       supplies: equipment.supplies.map(({ tapsV, ...s }) => ({ ...s, ...(tapsV ? { tapsV: [...tapsV] } : {}) })),
       cables: equipment.cables.map((c) => ({ ...c })),
-      ovens: equipment.ovens.map((o) => ({ ...o })),
+      ovens: equipment.ovens.map(({ id, name, remark }) => ({ id, name, remark })),
       instruments: await this.list(),
     };
   }

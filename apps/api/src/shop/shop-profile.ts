@@ -39,11 +39,23 @@ export interface Oven {
   readonly id: string;
   readonly name: string;
   readonly remark: string;
+  /** when its control thermocouple was last held against a calibrated one */
+  readonly thermocoupleCheckedOn?: string | null;
+  /** reads this much too high (+) or too low (−) */
+  readonly thermocoupleOffsetK?: number | null;
+}
+/** Gone from the bay, but still named in records. */
+export interface RemovedEquipment {
+  readonly id: string;
+  readonly list: 'supplies' | 'cables' | 'ovens';
+  readonly name: string;
+  readonly removedOn: string;
 }
 export interface BayEquipment {
   readonly supplies: readonly BaySupply[];
   readonly cables: readonly BayCable[];
   readonly ovens: readonly Oven[];
+  readonly removed?: readonly RemovedEquipment[];
 }
 
 export const EMPTY_PROFILE: ShopProfile = {
