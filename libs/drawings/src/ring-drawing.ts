@@ -1,6 +1,7 @@
 import { geometryProblems, type CoreGeometry } from '@libs/core-loss';
 import { formatQuantity, toShown, unitOf, type UnitSystem } from '@libs/quantities';
-import type { Drawing, Paint, Shape } from './drawing.js';
+import type { Drawing, Shape } from './drawing.js';
+import { heatPaint } from './heat-paint.js';
 import { arcTo, circlePath, lineTo, moveTo, polar, sectorPath, type Point } from './pen.js';
 
 export interface RingDrawingInput {
@@ -91,15 +92,6 @@ function wrapped(words: string, width: number): string[] {
     else lines.push(word);
   }
   return lines.slice(0, 5);
-}
-
-/** The heat of a slot pitch: cold iron is steel on card, the limit and above is the colour of failure. */
-function heatPaint(kelvin: number | undefined, fullK: number): Paint {
-  const cold: Paint = { from: 'card', to: 'steel', share: 0.24 };
-  if (kelvin === undefined) return cold;
-  const share = Math.min(1, Math.max(0, kelvin / fullK));
-  if (share < 0.25) return cold;
-  return share < 0.7 ? { from: 'card', to: 'unsure', share: 0.35 + share * 0.6 } : { from: 'unsure', to: 'fails', share: Math.min(1, (share - 0.7) / 0.3) };
 }
 
 function iron(g: CoreGeometry, r: Radii, input: RingDrawingInput): Shape[] {
