@@ -1,7 +1,7 @@
 import type { QueryRunner } from 'typeorm';
 
 /** Tables whose rows never change once written. */
-export const APPEND_ONLY = ['history', 'record_revisions', 'sign_offs', 'payments', 'limits_versions', 'invoice_lines'] as const;
+export const APPEND_ONLY = ['history', 'record_revisions', 'sign_offs', 'payments', 'limits_versions', 'invoice_lines', 'instrument_calibrations', 'instrument_certificates'] as const;
 
 /** Columns of an issued invoice or paper that never change. */
 const FROZEN: Record<string, readonly string[]> = {
@@ -11,10 +11,12 @@ const FROZEN: Record<string, readonly string[]> = {
 
 /**
  * Makes the database itself refuse a change of what has been issued or recorded.
- * A rebuilt table loses its triggers, so every migration that rebuilds one calls this again.
+ * A rebuilt table loses its triggers, so every migration that rebuilds one calls this again, as does one that brings a
+ * new table: the first migrations run before it is there.
  */
 export async function createTriggers(runner: QueryRunner): Promise<void> {
-  for (const table of APPEND_ONLY) {
+  const there = new Set(((await runner.query("SELECT name FROM sqlite_master WHERE type = 'table'")) as { name: string }[]).map((row) => row.name));
+  for (const table of APPEND_ONLY.filter((name) => there.has(name))) {
     for (const act of ['UPDATE', 'DELETE'] as const) {
       await runner.query(
         `CREATE TRIGGER IF NOT EXISTS ${table}_refuses_${act.toLowerCase()} BEFORE ${act} ON ${table} BEGIN SELECT RAISE(ABORT, '${table} is append only'); END`,

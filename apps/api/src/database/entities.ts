@@ -7,6 +7,8 @@ import { Customer } from '../customers/customer.entity.js';
 import { HistoryEntry } from '../history/history-entry.entity.js';
 import { IdempotencyKey } from '../idempotency/idempotency-key.entity.js';
 import { OvenHistoryRow } from '../insight/oven-history.entity.js';
+import { InstrumentCalibration } from '../instruments/instrument-calibration.entity.js';
+import { InstrumentCertificate } from '../instruments/instrument-certificate.entity.js';
 import { Instrument } from '../instruments/instrument.entity.js';
 import { InvoiceLineRow } from '../invoices/invoice-line.entity.js';
 import { Invoice } from '../invoices/invoice.entity.js';
@@ -30,5 +32,5 @@ import { User } from '../users/user.entity.js';
 export const ENTITIES = [
   User, Session, Customer, Machine, Job, JobRecord, RecordRevision, SignOff, Attachment, Quote, QuoteLineRow, Invoice, InvoiceLineRow,
   Payment, CheckoutAttempt, PaymentEvent, Paper, Instrument, LimitsVersion, Setting, NumberSeries, OutboxItem, HistoryEntry, IdempotencyKey,
-  BurnoutLoad, BurnoutLoadJob, OvenHistoryRow,
+  BurnoutLoad, BurnoutLoadJob, OvenHistoryRow, InstrumentCalibration, InstrumentCertificate,
 ];
