@@ -165,8 +165,16 @@ export const finalTestForm: RecordDefinition<'final-test', FinalValues> = {
     };
     return { readings, entered: reader.entered, problems: reader.problems };
   },
-  check: (readings, { limits }) => finalTestProblems(finalReadings(readings), limits.machine),
+  check: (readings, { limits }) => finalTestProblems(finalReadings(readings), limits.machine).map(({ path, message }) => ({ path: atLead(path, readings), message })),
 };
+
+/** The library names the three volts or amperes of a point; the box is the first of them that cannot be. */
+function atLead(path: string, { noLoad }: Final): string {
+  const [, point, figure] = /^noLoad\.points\.(\d+)\.(voltsV|ampsA)$/.exec(path) ?? [];
+  if (point === undefined) return path;
+  const three = noLoad?.points[Number(point)]?.[figure as 'voltsV' | 'ampsA'] ?? [];
+  return `${path}.${Math.max(0, three.findIndex((figureSi) => !(figureSi > 0)))}`;
+}
 
 /** The readings as the library takes them; the core is judged at its own gate, and only shown here. */
 export function finalReadings({ instruments: _instruments, remark: _remark, ...readings }: Final): FinalTestReadings {

@@ -32,6 +32,11 @@ interface RecordFormProps<K extends FormKind, V extends object> {
 
 const SERVER_PREFIX = /^record\.(readings\.)?/;
 
+/** The record's own values: the reason of a correction stands beside them. */
+function typedIn<V>({ why: _why, ...values }: FieldValues): V {
+  return values as V;
+}
+
 /** One record of a job: typed, kept as a draft, checked as the server checks, saved as a record or as a correction. */
 export function RecordForm<K extends FormKind, V extends object>({ definition, Fields, context, amend, onKept }: RecordFormProps<K, V>) {
   const { job, records, system } = context;
@@ -41,7 +46,7 @@ export function RecordForm<K extends FormKind, V extends object>({ definition, F
   const keep = useKeepRecord(job.id, key);
 
   const resolver: Resolver<FieldValues> = (values, _, options) => {
-    const problems = problemsIn(definition, definition.read(values as V), context);
+    const problems = problemsIn(definition, definition.read(typedIn<V>(values)), context);
     if (amend && String(values['why'] ?? '').trim() === '') problems.push({ path: 'why', message: t('whyEmpty') });
     const errors = Object.fromEntries(problems.map(({ path, message }) => [path, { type: 'reading', message }])) as FieldErrors;
     return problems.length === 0 ? { values, errors: {} } : { values: {}, errors: toNestErrors(errors, options) };
@@ -52,13 +57,13 @@ export function RecordForm<K extends FormKind, V extends object>({ definition, F
     mode: 'onTouched',
   });
   const draft = useDraft(form, `record:${job.id}:${kind}:${amend ? `amend-${amend.id}` : 'new'}`, { basis: version });
-  const filled = definition.read(useWatch({ control: form.control }) as V);
+  const filled = definition.read(typedIn<V>(useWatch({ control: form.control })));
 
   const send = (as: number) => {
-    const { why, ...values } = form.getValues();
-    const { readings, entered } = definition.read(values as V);
+    const values = form.getValues();
+    const { readings, entered } = definition.read(typedIn<V>(values));
     keep.mutate(
-      { record: { kind, readings, entered }, correction: amend ? { recordId: amend.id, version: as, reason: String(why).trim() } : null },
+      { record: { kind, readings, entered }, correction: amend ? { recordId: amend.id, version: as, reason: String(values['why']).trim() } : null },
       {
         onSuccess: (kept) => {
           draft.forget();
