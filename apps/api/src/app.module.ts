@@ -3,6 +3,7 @@ import { APP_FILTER, APP_INTERCEPTOR, APP_PIPE } from '@nestjs/core';
 import { AcceptanceModule } from './acceptance/acceptance.module.js';
 import { AttachmentsModule } from './attachments/attachments.module.js';
 import { AuthModule } from './auth/auth.module.js';
+import { BurnoutsModule } from './burnouts/burnouts.module.js';
 import { CertificatesModule } from './certificates/certificates.module.js';
 import { ClockModule } from './clock/clock.module.js';
 import { ConfigModule } from './config/config.module.js';
@@ -35,7 +36,7 @@ export class AppModule {
   static register(config: Config): DynamicModule {
     return {
       module: AppModule,
-      imports: [ConfigModule.register(config), ClockModule, DatabaseModule, HistoryModule, ShopModule, PapersModule, OutboxModule, AuthModule, UsersModule, AcceptanceModule, EquipmentModule, InstrumentsModule, RecordsModule, SignOffsModule, CertificatesModule, CustomersModule, MachinesModule, JobsModule, AttachmentsModule, SearchModule, QuotesModule, InvoicesModule, PaymentsModule, PortalModule],
+      imports: [ConfigModule.register(config), ClockModule, DatabaseModule, HistoryModule, ShopModule, PapersModule, OutboxModule, AuthModule, UsersModule, AcceptanceModule, EquipmentModule, InstrumentsModule, RecordsModule, BurnoutsModule, SignOffsModule, CertificatesModule, CustomersModule, MachinesModule, JobsModule, AttachmentsModule, SearchModule, QuotesModule, InvoicesModule, PaymentsModule, PortalModule],
       controllers: [HealthController],
       providers: [
         { provide: APP_PIPE, useFactory: schemaPipe },
