@@ -13,7 +13,9 @@ const SECRETS = { JWT_SECRET: 'demo-only-secret-never-for-a-real-shop', STRIPE_S
 export async function startDemo({ dataDir = inRoot('data', 'demo'), port = 3000, fakePort = 3010, host = process.env.HOST ?? '127.0.0.1', publicUrl, tell = () => undefined, logLevel = 'warn', onLine } = {}) {
   mkdirSync(dataDir, { recursive: true });
   const apiPort = await freePort(port, host);
-  const [stripePort, mailboxPort, smtpPort] = [await freePort(fakePort), await freePort(fakePort + 1), await freePort(fakePort + 2)];
+  // 0 asks for any free ports
+  const after = (step) => (fakePort === 0 ? 0 : fakePort + step);
+  const [stripePort, mailboxPort, smtpPort] = [await freePort(after(0)), await freePort(after(1)), await freePort(after(2))];
   const address = publicUrl ?? `http://localhost:${apiPort}`;
   const env = {
     ...SECRETS,

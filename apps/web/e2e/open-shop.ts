@@ -55,7 +55,7 @@ export class OpenShop {
       // a refusal that the page shows is also noted by the browser; it is no complaint
       if (message.type() === 'error' && !/status of 4\d\d/.test(message.text())) this.complaints.push(`${who}: ${message.text()}`);
     });
-    page.setDefaultTimeout(15_000);
+    page.setDefaultTimeout(Number(process.env['LOOPBAY_PATIENCE_MS'] ?? 20_000));
     await page.goto(`${this.address}/`);
     const email = who === 'second' ? SECOND_TECHNICIAN.email : SIGN_INS.find((s) => s.role === who)!.email;
     await page.getByLabel('E-mail').fill(email);
@@ -81,6 +81,14 @@ export class OpenShop {
     if (!folder) return;
     mkdirSync(folder, { recursive: true });
     await page.screenshot({ path: join(folder, `${name}.png`) });
+  }
+
+  /** Pictures of what everybody sees, for whoever looks into a journey that failed. */
+  async pictureAll(name: string): Promise<void> {
+    for (const [who, context] of this.contexts) {
+      const page = context.pages()[0];
+      if (page) await this.picture(page, `${name}-${who}`);
+    }
   }
 
   /** Nothing on the page breaks the rules of WCAG 2.2 A and AA that a program can see. */

@@ -12,5 +12,5 @@ export default defineConfig({
       { find: /^@libs\/([^/]+)$/, replacement: here('../../../libs/$1/src/index.ts') },
     ],
   },
-  test: { name: 'journeys', include: ['apps/web/e2e/**/*.journey.ts'], environment: 'node', fileParallelism: false, testTimeout: 240_000, hookTimeout: 180_000 },
+  test: { name: 'journeys', include: ['apps/web/e2e/**/*.journey.ts'], environment: 'node', fileParallelism: false, bail: 1, testTimeout: 240_000, hookTimeout: 180_000 },
 });
