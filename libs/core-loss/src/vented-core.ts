@@ -13,9 +13,10 @@ export interface AxialVents {
 /**
  * Back iron of a core with axial vents: what counts depends on where the cable runs.
  *
- * Through the vents it encloses only the iron outside them: `D_i' = D_c + d`, and depth, path, area and mass follow from there.
- * Any other way the flux passes the holes on both sides: their width is taken off the depth and their area off the mass,
- * `A = (h − d)·L_n`, `m = ρ·L_n·(π/4·(D_2² − D_1²) − N·π/4·d²)`; the mean path stays.
+ * Through the vents it encloses only the iron outside them: depth, path, area and mass follow from a new inside diameter. Any other way the flux
+ * passes the holes on both sides: their width is taken off the depth and their area off the mass; the mean path stays.
+ *
+ * `D_i' = D_c + d` (through the vents); `A = (h − d)·L_n`, `m = ρ·L_n·(π/4·(D_2² − D_1²) − N·π/4·d²)` (any other way)
  *
  * | symbol | argument | unit | range |
  * |---|---|---|---|
