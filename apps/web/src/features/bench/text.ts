@@ -152,6 +152,7 @@ export const t = defineText({
   waived: 'The test before is waived: hot spots and, on a bare core, absolute W/kg count. The increase is not established.',
   noBefore: 'No valid test before.',
   noBeforeWords: 'Without it an after test proves nothing. Ask for a waiver if none could be made.',
+  cannotTest: 'Cannot be tested? Ask for a waiver',
   askWaiver: 'Ask for a waiver',
   notOpen: 'The job is at “{step}”; this test comes later. Move the job first.',
 

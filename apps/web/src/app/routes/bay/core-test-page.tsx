@@ -2,6 +2,7 @@ import { useQuery } from '@tanstack/react-query';
 import type { Phase } from '../../../features/bench/bench-form.js';
 import { Bench } from '../../../features/bench/components/bench.js';
 import { KeptTest } from '../../../features/bench/components/kept-test.js';
+import { ReadingsPanel } from '../../../features/records/components/kept-record.js';
 import { CORE_CAUTIONS, t } from '../../../features/bench/text.js';
 import { Cautions } from '../../../components/cautions.js';
 import { Answer } from '../../../components/faces.js';
@@ -12,7 +13,8 @@ import { useNavigate, useParams, useSearchParams } from 'react-router-dom';
 import { useTell } from '../../../components/toaster.js';
 import { jobRecordsQuery, jobSheetQuery } from '../../../lib/job-queries.js';
 import { bayQuery, limitsQuery, recordsOfKind } from '../../../lib/job-records.js';
-import { NotOpenYet } from './not-open-yet.js';
+import { useMay } from '../../../lib/me.js';
+import { NotOpenYet, NotYours } from './not-open-yet.js';
 
 export const CoreTestBeforePage = () => <CoreTestPage phase="before" />;
 export const CoreTestAfterPage = () => <CoreTestPage phase="after" />;
@@ -23,6 +25,7 @@ function CoreTestPage({ phase }: { readonly phase: Phase }) {
   const [params] = useSearchParams();
   const navigate = useNavigate();
   const tell = useTell();
+  const mayWrite = useMay('records.write');
   const [differs, setDiffers] = useState(false);
   const job = useQuery(jobSheetQuery(id));
   const records = useQuery(jobRecordsQuery(id));
@@ -43,6 +46,7 @@ function CoreTestPage({ phase }: { readonly phase: Phase }) {
             const kept = recordsOfKind(all, kind).at(-1);
             const amend = all.find((r) => r.id === params.get('amend') && r.kind === kind) ?? null;
             const fill = amend !== null || params.get('again') === '1' || kept === undefined;
+            if (fill && !mayWrite) return <NotYours title={`${title} · ${sheet.number}`} job={sheet} />;
             if (kept === undefined && !hasReached(sheet.route, sheet.step, RECORD_FROM_STEP[kind])) return <NotOpenYet job={sheet} kind={kind} title={title} />;
             return (
               <Answer query={limits}>
@@ -56,7 +60,10 @@ function CoreTestPage({ phase }: { readonly phase: Phase }) {
                       )}
                     </Answer>
                   ) : (
-                    <KeptTest job={sheet} phase={phase} record={kept} records={all} limits={set} differs={differs} />
+                    <div className="stack">
+                      <KeptTest job={sheet} phase={phase} record={kept} records={all} limits={set} differs={differs} />
+                      <ReadingsPanel record={kept} />
+                    </div>
                   )
                 }
               </Answer>

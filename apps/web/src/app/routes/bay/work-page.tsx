@@ -15,7 +15,8 @@ import { jobRecordsQuery, jobSheetQuery } from '../../../lib/job-queries.js';
 import { bayQuery, limitsQuery, recordsOfKind } from '../../../lib/job-records.js';
 import { recordName } from '../../../lib/record-names.js';
 import { NotFoundPage } from '../error-page.js';
-import { NotOpenYet } from './not-open-yet.js';
+import { useMay } from '../../../lib/me.js';
+import { NotOpenYet, NotYours } from './not-open-yet.js';
 
 const isFormKind = (kind: string): kind is FormKind => (FORM_KINDS as readonly string[]).includes(kind);
 
@@ -30,6 +31,7 @@ function WorkOf({ id, kind }: { readonly id: string; readonly kind: FormKind }) 
   const navigate = useNavigate();
   const tell = useTell();
   const system = useUnits();
+  const mayWrite = useMay('records.write');
   const job = useQuery(jobSheetQuery(id));
   const records = useQuery(jobRecordsQuery(id));
   const bay = useQuery(bayQuery);
@@ -47,6 +49,7 @@ function WorkOf({ id, kind }: { readonly id: string; readonly kind: FormKind }) 
             const kept = recordsOfKind(all, kind).at(-1);
             const amend = all.find((r) => r.id === params.get('amend') && r.kind === kind) ?? null;
             if (kept && !amend && params.get('again') !== '1') return <KeptRecord job={sheet} record={kept} />;
+            if (!mayWrite) return <NotYours title={title} job={sheet} />;
             if (!kept && !hasReached(sheet.route, sheet.step, RECORD_FROM_STEP[kind])) return <NotOpenYet job={sheet} kind={kind} title={recordName(kind)} />;
             return (
               <Answer query={limits}>

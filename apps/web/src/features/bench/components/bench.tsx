@@ -150,6 +150,12 @@ function BenchHeader({ job, phase, again, amend, pending }: { readonly job: JobS
       below={
         <>
           {job.machine.description} · {job.customer.name} · <Link to={`/jobs/${job.id}`}>{t('toJob', { number: job.number })}</Link>
+          {phase === 'before' && !amend && (
+            <>
+              {' · '}
+              <Link to={`/jobs/${job.id}?step=core-test-before#work`}>{t('cannotTest')}</Link>
+            </>
+          )}
           {amend ? ` · ${t('correcting', { revision: amend.revision })}` : again > 1 ? ` · ${t('again', { n: again })}` : ''}
         </>
       }

@@ -18,7 +18,6 @@ export const nameOfInstruments = (record: RecordView) => (id: string) => record.
 
 /** A record as it is kept: what was read, what it came to, by which limits, with which instruments. */
 export function KeptRecord({ job, record }: { readonly job: JobSheet; readonly record: RecordView }) {
-  const system = useUnits();
   const navigate = useNavigate();
   const mayWrite = useMay('records.write');
   const judgements = judgementsIn(record);
@@ -53,6 +52,22 @@ export function KeptRecord({ job, record }: { readonly job: JobSheet; readonly r
           </div>
         </Panel>
       )}
+      <ReadingsPanel record={record} />
+      <div className="row">
+        <Link className="lb-record-link" to={`/jobs/${job.id}`}>
+          {t('toJob', { number: job.number })}
+        </Link>
+        <Link to={`/records/${record.id}/revisions`}>{t('revisions', { n: record.revision })}</Link>
+      </div>
+    </div>
+  );
+}
+
+/** What was read, in words, and with which instruments. */
+export function ReadingsPanel({ record }: { readonly record: RecordView }) {
+  const system = useUnits();
+  return (
+    <>
       <Panel title={t('readings')}>
         <Facts rows={saidReadings(record.readings, system, nameOfInstruments(record)).map((r) => [r.label, r.value] as const)} />
       </Panel>
@@ -68,13 +83,7 @@ export function KeptRecord({ job, record }: { readonly job: JobSheet; readonly r
           </ul>
         </Panel>
       )}
-      <div className="row">
-        <Link className="lb-record-link" to={`/jobs/${job.id}`}>
-          {t('toJob', { number: job.number })}
-        </Link>
-        <Link to={`/records/${record.id}/revisions`}>{t('revisions', { n: record.revision })}</Link>
-      </div>
-    </div>
+    </>
   );
 }
 
