@@ -16,6 +16,7 @@ import { ErrorFilter } from './http/error.filter.js';
 import { HealthController } from './http/health.controller.js';
 import { schemaPipe } from './http/schema.pipe.js';
 import { IdempotencyInterceptor } from './idempotency/idempotency.interceptor.js';
+import { InsightModule } from './insight/insight.module.js';
 import { InstrumentsModule } from './instruments/instruments.module.js';
 import { InvoicesModule } from './invoices/invoices.module.js';
 import { JobsModule } from './jobs/jobs.module.js';
@@ -36,7 +37,7 @@ export class AppModule {
   static register(config: Config): DynamicModule {
     return {
       module: AppModule,
-      imports: [ConfigModule.register(config), ClockModule, DatabaseModule, HistoryModule, ShopModule, PapersModule, OutboxModule, AuthModule, UsersModule, AcceptanceModule, EquipmentModule, InstrumentsModule, RecordsModule, BurnoutsModule, SignOffsModule, CertificatesModule, CustomersModule, MachinesModule, JobsModule, AttachmentsModule, SearchModule, QuotesModule, InvoicesModule, PaymentsModule, PortalModule],
+      imports: [ConfigModule.register(config), ClockModule, DatabaseModule, HistoryModule, ShopModule, PapersModule, OutboxModule, AuthModule, UsersModule, AcceptanceModule, EquipmentModule, InstrumentsModule, RecordsModule, BurnoutsModule, InsightModule, SignOffsModule, CertificatesModule, CustomersModule, MachinesModule, JobsModule, AttachmentsModule, SearchModule, QuotesModule, InvoicesModule, PaymentsModule, PortalModule],
       controllers: [HealthController],
       providers: [
         { provide: APP_PIPE, useFactory: schemaPipe },
