@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { addDays, shopDate, shopYear } from './shop-date.js';
+import { addDays, daysApart, shopDate, shopYear } from './shop-date.js';
 
 describe('the calendar of the shop', () => {
   it('the year of a number turns at midnight in the shop, not in Greenwich', () => {
@@ -15,5 +15,9 @@ describe('the calendar of the shop', () => {
   it('thirty days after the end of January are the second of March, in a leap year the first', () => {
     expect(addDays('2026-01-31', 30)).toBe('2026-03-02');
     expect(addDays('2028-01-31', 30)).toBe('2028-03-01');
+  });
+  it('days between two dates are counted on the calendar, backwards too', () => {
+    expect(daysApart('2026-03-28', '2026-03-30')).toBe(2);
+    expect(daysApart('2026-03-02', '2026-02-24')).toBe(-6);
   });
 });

@@ -1,5 +1,6 @@
 import { Inject, Injectable } from '@nestjs/common';
 import type { BayView, CreateInstrument, InstrumentView, UpdateInstrument } from '@shared/instruments';
+import type { EntityManager } from 'typeorm';
 import type { Actor } from '../auth/actor.js';
 import { Clock } from '../clock/clock.js';
 import { shopDate } from '../clock/shop-date.js';
@@ -12,10 +13,14 @@ import { AppError, changedMeanwhile, notFound } from '../http/app-error.js';
 import { Ids } from '../ids/ids.js';
 import { ShopService } from '../shop/shop.service.js';
 import { calibrationStanding, pastGrace } from './calibration-state.js';
+import { InstrumentCalibration } from './instrument-calibration.entity.js';
 import { Instrument } from './instrument.entity.js';
 
 type Row = Omit<InstrumentView, 'standing'>;
 const COLUMNS = 'id, tag, kind, description, serial, percentOfReading, percentOfRange, rangeText, calibratedOn, dueOn, certificateNumber, version';
+
+/** A change of any of these is told in the history of calibrations. */
+const CALIBRATION = ['calibratedOn', 'dueOn', 'certificateNumber', 'percentOfReading', 'percentOfRange'] as const;
 
 const taken = () => new AppError('TAKEN', 'An instrument has this tag already.', { fields: [{ path: 'tag', code: 'taken', message: 'An instrument has this tag already.' }] });
 
@@ -54,6 +59,12 @@ export class InstrumentsService {
     return rows.map((row) => ({ ...row, standing: calibrationStanding(row.dueOn, today) }));
   }
 
+  async one(id: string): Promise<InstrumentView> {
+    const row = await this.db.one<Row>(`SELECT ${COLUMNS} FROM instruments WHERE id = ?`, [id]);
+    if (!row) throw notFound('instrument');
+    return { ...row, standing: calibrationStanding(row.dueOn, this.today()) };
+  }
+
   async bay(): Promise<BayView> {
     const equipment = await this.shop.bay();
     return {
@@ -69,6 +80,7 @@ export class InstrumentsService {
       if (await manager.existsBy(Instrument, { tag: input.tag })) throw taken();
       const instrument = { id: this.ids.next(), ...input, version: 1 };
       await manager.insert(Instrument, instrument);
+      await this.noteCalibration(manager, actor, instrument.id, input);
       await this.history.record(manager, { actor, subject: { kind: 'instrument', id: instrument.id }, event: 'instrument.added', words: `${input.tag} added to the register.`, data: { ...input } });
       return { ...instrument, standing: calibrationStanding(input.dueOn, this.today()) };
     });
@@ -82,8 +94,30 @@ export class InstrumentsService {
       if (input.tag !== before.tag && (await manager.existsBy(Instrument, { tag: input.tag }))) throw taken();
       const changed = { ...input, version: before.version + 1 };
       await manager.update(Instrument, { id }, changed);
+      if (CALIBRATION.some((key) => before[key] !== input[key])) await this.noteCalibration(manager, actor, id, input);
       await this.history.record(manager, { actor, subject: { kind: 'instrument', id }, event: 'instrument.changed', words: `${input.tag} changed.`, data: { from: { ...before }, to: changed } });
       return { ...changed, id, standing: calibrationStanding(input.dueOn, this.today()) };
+    });
+  }
+
+  /** What the register says of a calibration goes into its history; what was found that day stays with it. */
+  private async noteCalibration(manager: EntityManager, actor: Actor, instrumentId: string, input: CreateInstrument): Promise<void> {
+    const { calibratedOn, dueOn, certificateNumber, percentOfReading, percentOfRange } = input;
+    const known = await manager.findOne(InstrumentCalibration, { where: { instrumentId, calibratedOn }, order: { at: 'DESC', id: 'DESC' } });
+    await manager.insert(InstrumentCalibration, {
+      id: this.ids.next(),
+      instrumentId,
+      calibratedOn,
+      dueOn,
+      certificateNumber,
+      percentOfReading,
+      percentOfRange,
+      laboratory: known?.laboratory ?? '',
+      asFound: known?.asFound ?? 'not-stated',
+      asFoundWords: known?.asFoundWords ?? '',
+      byUserId: actor.userId,
+      byName: actor.name,
+      at: this.clock.iso(),
     });
   }
 
