@@ -39,7 +39,7 @@ export const t = defineText({
   toFloor: 'All of them on the floor',
 
   invoiceTitle: 'Invoice {number}',
-  forJob: 'for {customer}, job',
+  forCustomer: 'for {customer}',
   fromQuote: 'from quote {number}',
   issuedOn: 'issued {day}',
   dueOn: 'due {day}',

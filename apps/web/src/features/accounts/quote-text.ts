@@ -3,7 +3,7 @@ import { defineText } from '../../lib/text.js';
 export const t = defineText({
   title: 'Quote {number}',
   newTitle: 'New quote for job {number}',
-  forJob: 'for {customer}, job',
+  forCustomer: 'for {customer}',
   caption: 'Lines of the quote',
   lines: 'Lines',
   kind: 'Kind',
@@ -16,6 +16,7 @@ export const t = defineText({
   inLine: '{field}, line {n}',
   up: 'Move line {n} up',
   down: 'Move line {n} down',
+  lineButtons: 'Move or take out',
   remove: 'Take line {n} out',
   add: 'Add a line',
   quick: 'Lines that come often',

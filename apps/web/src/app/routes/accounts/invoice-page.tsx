@@ -31,9 +31,8 @@ function Invoice({ invoice }: { readonly invoice: InvoiceView }) {
         below={
           <span className="row">
             <StateMark {...invoiceStateWords(invoice)} />
-            <span>
-              {t('forJob', { customer: invoice.customerName })} <Link to={`/jobs/${invoice.jobId}?tab=money`}>{invoice.jobNumber}</Link>
-            </span>
+            <span>{t('forCustomer', { customer: invoice.customerName })}</span>
+            <Link to={`/jobs/${invoice.jobId}?tab=money`}>{invoice.jobNumber}</Link>
             <span>{t('fromQuote', { number: invoice.quoteNumber })}</span>
             <span>{t('issuedOn', { day: dayOf(invoice.issuedAt) })}</span>
             <span>{t('dueOn', { day: calendarDay(invoice.dueOn) })}</span>

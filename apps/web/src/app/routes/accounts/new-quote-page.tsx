@@ -26,9 +26,10 @@ export function NewQuotePage() {
           <PageHeader
             title={t('newTitle', { number: sheet.number })}
             below={
-              <>
-                {t('forJob', { customer: sheet.customer.name })} <Link to={`/jobs/${jobId}?tab=money`}>{sheet.number}</Link>
-              </>
+              <span className="row">
+                <span>{t('forCustomer', { customer: sheet.customer.name })}</span>
+                <Link to={`/jobs/${jobId}?tab=money`}>{sheet.number}</Link>
+              </span>
             }
           />
           <QuoteEditor

@@ -42,9 +42,8 @@ function QuoteHeader({ quote }: { readonly quote: QuoteView }) {
         <span className="row">
           <StateMark {...quoteStateWords(quote)} />
           {quote.revision > 1 && <span>{words('revision', { n: quote.revision })}</span>}
-          <span>
-            {t('forJob', { customer: quote.customerName })} <Link to={`/jobs/${quote.jobId}?tab=money`}>{quote.jobNumber}</Link>
-          </span>
+          <span>{t('forCustomer', { customer: quote.customerName })}</span>
+          <Link to={`/jobs/${quote.jobId}?tab=money`}>{quote.jobNumber}</Link>
           {quote.sentAt && <span>{t('sentOn', { when: momentOf(quote.sentAt) })}</span>}
           {quote.state !== 'draft' && <span>{words('validUntil', { day: calendarDay(quote.validUntil) })}</span>}
         </span>

@@ -9,6 +9,7 @@ import { EditPerson } from '../../../features/shop/components/edit-person.js';
 import { PeopleTable } from '../../../features/shop/components/people-table.js';
 import { ShopTabs } from '../../../features/shop/components/shop-tabs.js';
 import { t } from '../../../features/shop/text.js';
+import { useMay } from '../../../lib/me.js';
 
 /** Who may sign in, and as what. Whoever is changed stands in the address. */
 export function PeoplePage() {
@@ -16,10 +17,11 @@ export function PeoplePage() {
   const [params, setParams] = useSearchParams();
   const open = params.get('person');
   const show = (person: string | null) => setParams(person === null ? {} : { person });
+  const mayManage = useMay('users.manage');
   const edited = users.data?.find((u) => u.id === open);
   return (
     <div>
-      <PageHeader title={t('people')} actions={<Button intent="primary" text={t('addPerson')} onClick={() => show('new')} />} />
+      <PageHeader title={t('people')} actions={mayManage && <Button intent="primary" text={t('addPerson')} onClick={() => show('new')} />} />
       <ShopTabs />
       <Answer query={users} isEmpty={(all) => all.length === 0} empty={<Empty title={t('noPeople')} />}>
         {(all) => (
@@ -28,7 +30,7 @@ export function PeoplePage() {
           </Panel>
         )}
       </Answer>
-      {open === 'new' && <AddPerson onClose={() => show(null)} />}
+      {mayManage && open === 'new' && <AddPerson onClose={() => show(null)} />}
       {edited && <EditPerson key={edited.id} user={edited} onClose={() => show(null)} />}
     </div>
   );

@@ -6,6 +6,8 @@ import { MoneyField } from '../../../components/money-field.js';
 import { useTell } from '../../../components/toaster.js';
 import { moneyOf } from '../../../lib/format.js';
 import { problemsOf, showProblems, showServerProblems } from '../../../lib/form-problems.js';
+import { sendForm } from '../../../lib/send-form.js';
+import { unsaid } from '../../../lib/unsaid.js';
 import { useApproveForCustomer } from '../api/accounts-changes.js';
 import { emptyApproval, readApproval, type ApprovalForm } from '../approval-form.js';
 import { t } from '../text.js';
@@ -16,10 +18,11 @@ const HOW = (['phone', 'purchase-order'] as const).map((value) => ({ value, labe
 export function ApprovalDialog({ quote, onClose }: { readonly quote: QuoteView; readonly onClose: () => void }) {
   const approve = useApproveForCustomer(quote.jobId, quote.id);
   const tell = useTell();
-  const { control, handleSubmit, setError } = useForm<ApprovalForm>({ defaultValues: emptyApproval(new Date()) });
+  const form = useForm<ApprovalForm>({ defaultValues: emptyApproval(new Date()) });
+  const { control, setError } = form;
   const how = useWatch({ control, name: 'how' });
-  const write = (form: ApprovalForm) => {
-    const { candidate, problems } = readApproval(form, quote.version, quote.currency);
+  const write = (values: ApprovalForm) => {
+    const { candidate, problems } = readApproval(values, quote.version, quote.currency);
     const input = approveForCustomerSchema.safeParse(candidate);
     if (problems.length > 0 || !input.success) return showProblems([...problems, ...(input.success ? [] : problemsOf(input.error))], setError);
     approve.mutate(input.data, {
@@ -31,7 +34,7 @@ export function ApprovalDialog({ quote, onClose }: { readonly quote: QuoteView; 
     });
   };
   return (
-    <ConfirmDialog open title={t('approveTitle', { number: quote.number })} confirm={t('approveConfirm')} pending={approve.isPending} error={approve.error} onConfirm={() => void handleSubmit(write)()} onClose={onClose}>
+    <ConfirmDialog open title={t('approveTitle', { number: quote.number })} confirm={t('approveConfirm')} pending={approve.isPending} error={unsaid(approve.error)} onConfirm={() => sendForm(form, write)} onClose={onClose}>
       <p>{t('approveWords', { money: moneyOf(quote.grossMinor, quote.currency) })}</p>
       <ChoiceField control={control} name="how" label={t('how')} options={HOW} />
       <TextField control={control} name="approvedBy" label={t('approvedBy')} />

@@ -1,6 +1,6 @@
 import { Button } from '@blueprintjs/core';
 import { saveQuoteSchema, quoteViewSchema, type QuoteView } from '@shared/quotes';
-import { useMemo, useState, type ReactNode } from 'react';
+import { useEffect, useMemo, useRef, useState, type ReactNode } from 'react';
 import { useForm } from 'react-hook-form';
 import { DraftNotice, useDraft } from '../../../components/draft.js';
 import { TextAreaField, TextField } from '../../../components/fields.js';
@@ -9,6 +9,7 @@ import { ConflictNotice, ErrorNotice } from '../../../components/notices.js';
 import { Panel } from '../../../components/panel.js';
 import { problemsOf, showProblems, showServerProblems } from '../../../lib/form-problems.js';
 import { ApiError } from '../../../lib/http.js';
+import { sendForm } from '../../../lib/send-form.js';
 import { quoteDifferences } from '../quote-conflict.js';
 import { formOf, readQuote, type QuoteForm } from '../quote-form.js';
 import { t } from '../quote-text.js';
@@ -46,8 +47,13 @@ export function QuoteEditor({ quote, start, currency, draftKey, pending, error, 
   const [version, setVersion] = useState(quote?.version ?? 0);
   const [settled, setSettled] = useState<unknown>(null);
   const form = useForm<QuoteForm>({ defaultValues: start });
-  const { control, handleSubmit, setError, reset, getValues } = form;
+  const { control, setError, reset, getValues } = form;
   const draft = useDraft(form, draftKey, { basis: version });
+  const said = useRef<HTMLDivElement>(null);
+  useEffect(() => {
+    // the button is always in sight, what it led to would not be
+    if (error && error !== settled) said.current?.scrollIntoView?.({ block: 'center' });
+  }, [error, settled]);
   const theirs = useMemo(() => (error === settled ? null : theirsOf(error)), [error, settled]);
 
   const send = (values: QuoteForm, asOf: number) => {
@@ -73,7 +79,14 @@ export function QuoteEditor({ quote, start, currency, draftKey, pending, error, 
   };
   const gone = theirs && theirs.state !== 'draft';
   return (
-    <form className="stack" noValidate onSubmit={(e) => void handleSubmit((values) => send(values, version))(e)}>
+    <form
+      className="stack"
+      noValidate
+      onSubmit={(e) => {
+        e.preventDefault();
+        sendForm(form, (values) => send(values, version));
+      }}
+    >
       <DraftNotice form={form} draft={draft} />
       <Panel title={t('lines')}>
         <div className="stack">
@@ -87,18 +100,22 @@ export function QuoteEditor({ quote, start, currency, draftKey, pending, error, 
           <TextAreaField control={control} name="note" label={t('note')} help={t('noteHelp')} optional />
         </div>
       </Panel>
-      {gone ? (
-        <Notice intent="warning" role="alert" title={t('gone')}>
-          <div className="stack">
-            <p>{t('goneWords')}</p>
-            <div><Button text={t('see')} onClick={() => onGone?.(theirs)} /></div>
-          </div>
-        </Notice>
-      ) : theirs ? (
-        <ConflictNotice differences={quoteDifferences(theirs, getValues())} onTakeTheirs={takeTheirs} onKeepMine={() => void handleSubmit((values) => send(values, theirs.version))()} />
-      ) : (
-        error !== settled && <ErrorNotice error={error} />
-      )}
+      <div ref={said} className="lb-quote-said">
+        {gone ? (
+          <Notice intent="warning" role="alert" title={t('gone')}>
+            <div className="stack">
+              <p>{t('goneWords')}</p>
+              <div>
+                <Button text={t('see')} onClick={() => onGone?.(theirs)} />
+              </div>
+            </div>
+          </Notice>
+        ) : theirs ? (
+          <ConflictNotice differences={quoteDifferences(theirs, getValues())} onTakeTheirs={takeTheirs} onKeepMine={() => sendForm(form, (values) => send(values, theirs.version))} />
+        ) : (
+          error !== settled && <ErrorNotice error={error} />
+        )}
+      </div>
       <div className="row lb-quote-foot">
         <Button type="submit" intent={quote && !draft.dirty ? 'none' : 'primary'} text={t('save')} loading={pending} />
         {actions?.(draft.dirty)}

@@ -34,7 +34,9 @@ export function QuoteLines({ control, currency }: { readonly control: Control<Qu
             <th scope="col">{`${t('price')} ${currency}`}</th>
             <th scope="col">{t('rate')}</th>
             <th scope="col" className="number">{t('amount')}</th>
-            <th />
+            <th scope="col">
+              <span className="visually-hidden">{t('lineButtons')}</span>
+            </th>
           </tr>
         </thead>
         <tbody>
@@ -63,6 +65,8 @@ export function QuoteLines({ control, currency }: { readonly control: Control<Qu
         <Button icon={<Plus />} text={t('add')} onClick={() => add({}, 'description')} />
         <PopoverNext
           placement="bottom-start"
+          // the price of the new line is typed next
+          shouldReturnFocusOnClose={false}
           content={
             <Menu aria-label={t('quick')}>
               {QUICK_LINES.map((line) => (

@@ -10,6 +10,8 @@ import { useTell } from '../../../components/toaster.js';
 import { moneyOf, shopToday } from '../../../lib/format.js';
 import { problemsOf, showProblems, showServerProblems } from '../../../lib/form-problems.js';
 import { ApiError } from '../../../lib/http.js';
+import { sendForm } from '../../../lib/send-form.js';
+import { unsaid } from '../../../lib/unsaid.js';
 import { useRecordPayment } from '../api/accounts-changes.js';
 import { invoiceQuery } from '../api/accounts-queries.js';
 import { t } from '../invoice-text.js';
@@ -24,7 +26,8 @@ export function RecordPayment({ invoice }: { readonly invoice: InvoiceView }) {
   const tell = useTell();
   // the invoice this form was filled for: another payment meanwhile is a conflict, not a silent change of the balance
   const [seen, setSeen] = useState(invoice);
-  const { control, handleSubmit, setError, reset, getValues } = useForm<PaymentForm>({ defaultValues: paymentFormOf(invoice, shopToday(new Date())) });
+  const form = useForm<PaymentForm>({ defaultValues: paymentFormOf(invoice, shopToday(new Date())) });
+  const { control, setError, reset, getValues } = form;
   const theirs = useMemo(() => theirsOf(record.error), [record.error]);
 
   const start = (from: InvoiceView) => {
@@ -32,8 +35,8 @@ export function RecordPayment({ invoice }: { readonly invoice: InvoiceView }) {
     reset(paymentFormOf(from, shopToday(new Date())));
     record.reset();
   };
-  const send = (form: PaymentForm, against: InvoiceView) => {
-    const { candidate, problems } = readPayment(form, against.version, against);
+  const send = (values: PaymentForm, against: InvoiceView) => {
+    const { candidate, problems } = readPayment(values, against.version, against);
     const input = recordPaymentSchema.safeParse(candidate);
     if (problems.length > 0 || !input.success) return showProblems([...problems, ...(input.success ? [] : problemsOf(input.error))], setError);
     record.mutate(input.data, {
@@ -45,7 +48,14 @@ export function RecordPayment({ invoice }: { readonly invoice: InvoiceView }) {
     });
   };
   return (
-    <form className="stack" noValidate onSubmit={(e) => void handleSubmit((form) => send(form, seen))(e)}>
+    <form
+      className="stack"
+      noValidate
+      onSubmit={(e) => {
+        e.preventDefault();
+        sendForm(form, (values) => send(values, seen));
+      }}
+    >
       <p className="muted">{t('recordHelp')}</p>
       <div className="fields">
         <ChoiceField control={control} name="kind" label={t('kind')} options={KINDS} wide />
@@ -62,11 +72,11 @@ export function RecordPayment({ invoice }: { readonly invoice: InvoiceView }) {
           }}
           onKeepMine={() => {
             setSeen(theirs);
-            void handleSubmit((form) => send(form, theirs))();
+            sendForm(form, (values) => send(values, theirs));
           }}
         />
       ) : (
-        <ErrorNotice error={record.error} />
+        <ErrorNotice error={unsaid(record.error)} />
       )}
       <div>
         <Button type="submit" intent="primary" text={t('recordConfirm')} loading={record.isPending} />

@@ -4,6 +4,8 @@ import { ConfirmDialog } from '../../../components/confirm-dialog.js';
 import { ChoiceField, TextField } from '../../../components/fields.js';
 import { useTell } from '../../../components/toaster.js';
 import { problemsOf, showProblems, showServerProblems } from '../../../lib/form-problems.js';
+import { sendForm } from '../../../lib/send-form.js';
+import { unsaid } from '../../../lib/unsaid.js';
 import { useCreateUser } from '../api/shop-queries.js';
 import { t } from '../text.js';
 import { emptyUser, readNewUser, type NewUserForm } from '../user-form.js';
@@ -16,10 +18,11 @@ const SIDES = (['shop', 'customer'] as const).map((value) => ({ value, label: t(
 export function AddPerson({ onClose }: { readonly onClose: () => void }) {
   const create = useCreateUser();
   const tell = useTell();
-  const { control, handleSubmit, setError } = useForm<NewUserForm>({ defaultValues: emptyUser });
+  const form = useForm<NewUserForm>({ defaultValues: emptyUser });
+  const { control, setError } = form;
   const side = useWatch({ control, name: 'side' });
-  const send = (form: NewUserForm) => {
-    const { candidate, problems } = readNewUser(form);
+  const send = (values: NewUserForm) => {
+    const { candidate, problems } = readNewUser(values);
     const input = createUserSchema.safeParse(candidate);
     if (problems.length > 0 || !input.success) return showProblems([...problems, ...(input.success ? [] : problemsOf(input.error))], setError);
     create.mutate(input.data, {
@@ -31,7 +34,7 @@ export function AddPerson({ onClose }: { readonly onClose: () => void }) {
     });
   };
   return (
-    <ConfirmDialog open title={t('addTitle')} confirm={t('addConfirm')} pending={create.isPending} error={create.error} onConfirm={() => void handleSubmit(send)()} onClose={onClose}>
+    <ConfirmDialog open title={t('addTitle')} confirm={t('addConfirm')} pending={create.isPending} error={unsaid(create.error)} onConfirm={() => sendForm(form, send)} onClose={onClose}>
       <ChoiceField control={control} name="side" label={t('side')} options={SIDES} />
       <TextField control={control} name="name" label={t('name')} />
       <TextField control={control} name="email" type="email" label={t('email')} help={t('emailHelp')} />

@@ -7,6 +7,8 @@ import { ConflictNotice, ErrorNotice } from '../../../components/notices.js';
 import { useTell } from '../../../components/toaster.js';
 import { problemsOf, showProblems, showServerProblems } from '../../../lib/form-problems.js';
 import { ApiError } from '../../../lib/http.js';
+import { sendForm } from '../../../lib/send-form.js';
+import { unsaid } from '../../../lib/unsaid.js';
 import { useUpdateUser } from '../api/shop-queries.js';
 import { t } from '../text.js';
 import { changedUserSchema, readUser, userDifferences, userFormOf, type ChangedUser, type UserForm } from '../user-form.js';
@@ -24,10 +26,11 @@ export function EditPerson({ user, onClose }: { readonly user: UserView; readonl
   const tell = useTell();
   const isCustomer = user.customerId !== null;
   const [version, setVersion] = useState(user.version);
-  const { control, handleSubmit, setError, reset, getValues } = useForm<UserForm>({ defaultValues: userFormOf(user) });
+  const form = useForm<UserForm>({ defaultValues: userFormOf(user) });
+  const { control, setError, reset, getValues } = form;
   const theirs = useMemo(() => theirsOf(update.error), [update.error]);
-  const send = (form: UserForm, asOf: number) => {
-    const { candidate, problems } = readUser(form, isCustomer, asOf);
+  const send = (values: UserForm, asOf: number) => {
+    const { candidate, problems } = readUser(values, isCustomer, asOf);
     const input = updateUserSchema.safeParse(candidate);
     if (problems.length > 0 || !input.success) return showProblems([...problems, ...(input.success ? [] : problemsOf(input.error))], setError);
     update.mutate(input.data, {
@@ -40,7 +43,13 @@ export function EditPerson({ user, onClose }: { readonly user: UserView; readonl
   };
   return (
     <Dialog isOpen onClose={onClose} title={t('editTitle', { name: user.name })}>
-      <form noValidate onSubmit={(e) => void handleSubmit((form) => send(form, version))(e)}>
+      <form
+        noValidate
+        onSubmit={(e) => {
+          e.preventDefault();
+          sendForm(form, (values) => send(values, version));
+        }}
+      >
         <DialogBody>
           <div className="stack">
             <TextField control={control} name="name" label={t('name')} />
@@ -54,10 +63,10 @@ export function EditPerson({ user, onClose }: { readonly user: UserView; readonl
                   reset(userFormOf(theirs));
                   update.reset();
                 }}
-                onKeepMine={() => void handleSubmit((form) => send(form, theirs.version))()}
+                onKeepMine={() => sendForm(form, (values) => send(values, theirs.version))}
               />
             ) : (
-              <ErrorNotice error={update.error} />
+              <ErrorNotice error={unsaid(update.error)} />
             )}
           </div>
         </DialogBody>

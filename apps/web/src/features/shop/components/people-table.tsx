@@ -12,7 +12,7 @@ export function PeopleTable({ users, onEdit }: { readonly users: readonly UserVi
     { key: 'roles', title: t('roles'), cell: (u) => rolesWords(u.roles) },
     { key: 'customer', title: t('customer'), cell: (u) => u.customerName ?? <span className="muted">–</span> },
     { key: 'state', title: t('standsAs'), cell: (u) => (u.disabled ? <StateMark tone="quiet" words={t('mayNot')} /> : <StateMark tone="good" words={t('maySignIn')} />) },
-    { key: 'edit', title: '', cell: (u) => <Button text={t('change')} aria-label={t('edit', { name: u.name })} onClick={() => onEdit(u.id)} /> },
+    { key: 'edit', title: t('change'), cell: (u) => <Button text={t('change')} aria-label={t('edit', { name: u.name })} onClick={() => onEdit(u.id)} /> },
   ];
   return <DataTable caption={t('people')} columns={columns} rows={users} rowKey={(u) => u.id} />;
 }
