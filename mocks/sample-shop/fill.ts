@@ -16,6 +16,7 @@ import { ShopService } from '../../apps/api/src/shop/shop.service.js';
 import { User } from '../../apps/api/src/users/user.entity.js';
 import { CUSTOMERS, TERMS, type CustomerKey } from './customers.js';
 import { MACHINES } from './machines.js';
+import { copyOlderBook } from './ovens.js';
 import { SamplePerson } from './people.js';
 import { script } from './script.js';
 import { BAY, INSTRUMENTS, PROFILE } from './shop.js';
@@ -51,6 +52,7 @@ export async function fillSampleShop(config: Config, { seedDay, mailer, tell = (
   try {
     const stage = new Stage(app, clock, seedDay, await hire(app, config, clock, seedDay));
     await furnish(app, stage);
+    await copyOlderBook(stage);
     for (const scene of script(stage)) {
       stage.day(scene.day, scene.hour);
       await scene.play();

@@ -26,6 +26,15 @@ export class SamplePerson {
     return this.ask<T>('PUT', path, payload);
   }
 
+  /** One file as a form, as a browser sends it. */
+  async upload<T>(path: string, name: string, text: string): Promise<T> {
+    const edge = 'sample-shop-file';
+    const payload = `--${edge}\r\ncontent-disposition: form-data; name="file"; filename="${name}"\r\ncontent-type: text/csv\r\n\r\n${text}\r\n--${edge}--\r\n`;
+    const answer = await this.app.inject({ method: 'POST', url: `/api${path}`, headers: { origin: this.origin, cookie: this.cookie, 'content-type': `multipart/form-data; boundary=${edge}` }, payload });
+    if (answer.statusCode >= 300) throw new Error(`the file for ${path} was refused (${answer.statusCode}): ${answer.payload}`);
+    return JSON.parse(answer.payload) as T;
+  }
+
   private async ask<T>(method: 'GET' | 'POST' | 'PUT', path: string, payload?: object): Promise<T> {
     const answer = await this.app.inject({ method, url: `/api${path}`, headers: { origin: this.origin, cookie: this.cookie }, ...(payload ? { payload } : {}) });
     if (answer.statusCode >= 300) throw new Error(`${method} ${path} was refused (${answer.statusCode}): ${answer.payload}\n${JSON.stringify(payload)}`);

@@ -1,5 +1,6 @@
 import type { Step } from '@shared/route';
 import { ringTest, type InstrumentIds, type RingTest } from './ring-tests.js';
+import { burn, LOADS, sensorFoundLow } from './ovens.js';
 import { beforeVarnish, finalTest, incomingTest } from './machine-tests.js';
 import { reconditionLines, rewindLines } from './quotes.js';
 import { SampleJob, type Stage } from './stage.js';
@@ -189,6 +190,17 @@ async function waive(stage: Stage, job: SampleJob, reason: string, words: string
 
 const castIron = { corePlate: 'unknown', frameMaterial: 'cast-iron' } as const;
 
+/** Each load in the evening of its day, after its jobs were stripped. */
+function loads(stage: Stage, stories: readonly Telling[]): Scene[] {
+  const jobIds = (load: (typeof LOADS)[number]) => load.jobs.map((machine) => stories.find((s) => s.machine === machine)!.jobId);
+  return LOADS.flatMap((load): Scene[] => {
+    let kept: Awaited<ReturnType<typeof burn>> | undefined;
+    const scenes: Scene[] = [{ day: load.day, hour: 20, play: async () => void (kept = await burn(stage, load, jobIds(load))) }];
+    if (load.oven === 'O2' && load.jobs.includes(12)) scenes.push({ day: load.day + 2, hour: 16, play: () => sensorFoundLow(stage, kept!, load, jobIds(load)) });
+    return scenes;
+  });
+}
+
 /** What happened in the shop in the five weeks before the seed date, as scenes in the order of their days. */
 export function script(stage: Stage): Scene[] {
   const tell = (machine: number) => new Telling(stage, machine);
@@ -374,5 +386,5 @@ export function script(stage: Stage): Scene[] {
       });
     },
   });
-  return [...stories, back].flatMap((s) => s.scenes).sort((a, b) => a.day - b.day || (a.hour ?? 8) - (b.hour ?? 8));
+  return [...[...stories, back].flatMap((s) => s.scenes), ...loads(stage, stories)].sort((a, b) => a.day - b.day || (a.hour ?? 8) - (b.hour ?? 8));
 }
