@@ -10,7 +10,7 @@ export const t = defineText({
   export: 'Export as CSV',
   caption: 'Jobs in the house',
   steps: 'Jobs by step',
-  stepCell: '{step}: {open} in work, {held} on hold, {late} late',
+  stepCell: ': {open} in work, {held} on hold, {late} late',
   held: '{n} held',
   lateCount: '{n} late',
   filters: 'Filter the list',

@@ -19,10 +19,11 @@ export function StepStrip({ steps, chosen }: { readonly steps: FloorSteps; reado
   return (
     <nav className="lb-steps" aria-label={t('steps')}>
       {steps.map(({ step, open, onHold, late }) => (
-        <Link key={step} to={hrefOf(step)} aria-current={step === chosen ? 'true' : undefined} className={open + onHold === 0 ? 'none' : ''} aria-label={t('stepCell', { step: stepName(step), open, held: onHold, late })}>
+        <Link key={step} to={hrefOf(step)} aria-current={step === chosen ? 'true' : undefined} className={open + onHold === 0 ? 'none' : ''}>
           <span className="count num">{open + onHold}</span>
           <span className="name">{stepName(step)}</span>
-          <span className="marks">
+          <span className="visually-hidden">{t('stepCell', { open, held: onHold, late })}</span>
+          <span className="marks" aria-hidden="true">
             {late > 0 && (
               <span className="late num">
                 <Flag />
