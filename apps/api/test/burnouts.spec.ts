@@ -1,4 +1,6 @@
 import { readdirSync } from 'node:fs';
+import { request as httpRequest } from 'node:http';
+import type { AddressInfo } from 'node:net';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { jobLoadsSchema, loadPageSchema, loadViewSchema, waitingJobsSchema, type LoadView } from '@shared/burnouts';
 import { ReadDb } from '../src/database/read-db.js';
@@ -17,6 +19,7 @@ let aluminium: BenchJob;
 
 beforeAll(async () => {
   shop = await openTestShop();
+  await shop.app.listen(0, '127.0.0.1');
   await shop.app.get(UnitOfWork).run((manager) => shop.app.get(ShopService).write(manager, 'bay', { supplies: [], cables: [], ovens: [{ id: 'O1', name: 'O1', remark: '' }, { id: 'O2', name: 'Big oven', remark: '' }] }));
   ({ staff, meters } = await staffAndMeters(shop));
   iron = await atTheStrip(1);
@@ -213,6 +216,56 @@ describe('a file that is none', () => {
   it('the record of a day on which the part was never hot is no burnout', async () => {
     const view = await taken(await loaded([iron]), night(120));
     expect(view).toMatchObject({ verdict: 'not-valid', reasons: [{ code: 'never-hot', peakC: 120 }] });
+  });
+});
+
+describe('a file of more than sixty megabytes', () => {
+  const MB = 1024 * 1024;
+  /** Sends until it is answered; tells how much had gone by then, and what the process grew by. */
+  async function pour(declared: boolean): Promise<{ status: number; code: string; sentMb: number; grewMb: number }> {
+    const to = await loaded([iron]);
+    const { port } = shop.app.getHttpServer().address() as AddressInfo;
+    const head = Buffer.from('--xx\r\nContent-Disposition: form-data; name="file"; filename="year.csv"\r\nContent-Type: text/csv\r\n\r\n');
+    const tail = Buffer.from('\r\n--xx--\r\n');
+    const before = process.memoryUsage().rss;
+    let [sent, peak, answered] = [0, before, false];
+    return new Promise((resolve, reject) => {
+      const headers = { origin: 'http://shop.test', ...staff.technician.carries(), 'content-type': 'multipart/form-data; boundary=xx', ...(declared ? { 'content-length': head.length + 70 * MB + tail.length } : {}) };
+      const req = httpRequest({ port, host: '127.0.0.1', method: 'POST', path: `/api/burnouts/${to.id}/file?version=${to.version}`, headers }, (res) => {
+        answered = true;
+        const chunks: Buffer[] = [];
+        res.on('data', (c: Buffer) => chunks.push(c));
+        res.on('end', () => {
+          req.destroy();
+          resolve({ status: res.statusCode!, code: (JSON.parse(Buffer.concat(chunks).toString()) as { code: string }).code, sentMb: sent / MB, grewMb: (peak - before) / MB });
+        });
+      });
+      req.on('error', (error) => (answered ? undefined : reject(error)));
+      const rows = Buffer.from('2026-03-02 04:00:00,288.8\n'.repeat(10_000));
+      const more = (): void => {
+        if (answered) return;
+        peak = Math.max(peak, process.memoryUsage().rss);
+        if (sent >= 70 * MB) return void req.end(tail);
+        sent += rows.length;
+        req.write(rows, () => setTimeout(more, 1));
+      };
+      req.write(head, more);
+    });
+  }
+
+  it('said beforehand, it is refused before it is sent', async () => {
+    const answer = await pour(true);
+    expect(answer).toMatchObject({ status: 413, code: 'FILE_TOO_LARGE' });
+    expect(answer.sentMb).toBeLessThan(10);
+  });
+
+  it('not said beforehand, it is refused at the limit, and leaves nothing', async () => {
+    const before = stored();
+    const answer = await pour(false);
+    expect(answer).toMatchObject({ status: 413, code: 'FILE_TOO_LARGE' });
+    expect(answer.sentMb).toBeGreaterThan(59);
+    expect(answer.grewMb).toBeLessThan(80);
+    expect(stored()).toEqual(before);
   });
 });
 
