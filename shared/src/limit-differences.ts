@@ -53,7 +53,7 @@ export const differenceWords = ({ name, from, to, valueChanged }: LimitDifferenc
 export function sourcesToLookAt(from: unknown, to: unknown, confirmed: readonly string[]): string[] {
   const open = limitDifferences(from, to).flatMap((d) => {
     const sourcePath = LIMIT_ROWS.find((row) => row.valuePath === d.path)?.sourcePath;
-    return d.valueChanged && !d.sourceChanged && sourcePath && !confirmed.includes(sourcePath) ? [sourcePath] : [];
+    return d.valueChanged && d.to.value !== null && !d.sourceChanged && sourcePath && !confirmed.includes(sourcePath) ? [sourcePath] : [];
   });
   return [...new Set(open)];
 }
