@@ -40,6 +40,7 @@ describe('the sample shop', () => {
     ['HK-H2', 'rewind', 'open'],
     ['CP-E37', 'core-test-after', 'open'],
     ['SD-W75', 'awaiting-approval', 'open'],
+    ['OW-22-07', 'core-test-before', 'open'],
   ])('the machine %s stands at %s and is %s', async (serial, step, state) => {
     expect(await jobs()).toContainEqual(expect.objectContaining({ serial, step, state }));
   });

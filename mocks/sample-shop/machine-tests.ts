@@ -12,7 +12,7 @@ function insulation(machine: number, megohms: number, temperature: number): Insu
 }
 
 /** Resistances between leads at 20 °C, from the windings' own figures. */
-const OHMS: Record<number, number> = { 1: 0.0131, 2: 0.0364, 3: 0.0711, 6: 0.2622, 7: 0.0589, 8: 21.1, 9: 0.062, 10: 0.7502, 11: 0.021, 12: 0.1523, 13: 1.12 };
+const OHMS: Record<number, number> = { 1: 0.0131, 2: 0.0364, 3: 0.0711, 6: 0.2622, 7: 0.0589, 8: 21.1, 9: 0.062, 10: 0.7502, 11: 0.021, 12: 0.1523, 13: 1.12, 14: 0.262 };
 
 function resistance(machine: number, temperature: number, faulty: boolean): IncomingTestReadingsInput['windingResistance'] {
   const ohms = OHMS[machine];

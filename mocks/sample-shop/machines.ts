@@ -50,4 +50,5 @@ export const MACHINES: Record<number, SampleMachine> = {
   11: { customer: 'port', description: '110 kW 6-pole slip-ring hoist motor', nameplate: motor(110, 6, '315M', 400, 978, 201, 0.85, 93, 'NU319', '6319', { kind: 'slip-ring', serial: 'HK-H2', duty: 'S4 40 %' }) },
   12: { customer: 'plastics', description: '37 kW 4-pole extruder motor', nameplate: motor(37, 4, '225S', 400, 1478, 67, 0.86, 92.7, '6313', '6312', { serial: 'CP-E37' }) },
   13: { customer: 'dairy', description: '7.5 kW 4-pole whey pump motor', nameplate: motor(7.5, 4, '132M', 400, 1455, 14.7, 0.83, 88.7, '6208', '6208', { serial: 'SD-W75' }) },
+  14: { customer: 'water', description: '22 kW 4-pole booster pump motor', nameplate: motor(22, 4, '180L', 400, 1470, 41, 0.84, 91.6, '6311', '6311', { serial: 'OW-22-07' }) },
 };

@@ -366,6 +366,9 @@ export function script(stage: Stage): Scene[] {
         await job.moveTo('awaiting-approval');
         await makeQuote(stage, job, reconditionLines(6, '6208/6208'));
       }),
+    tell(14)
+      .comesIn(-2, { complaint: 'Hums and does not start after a lightning strike.', promisedIn: 8 })
+      .opened(-1, { ...castIron, inspection: 'One phase to earth in the slot, core sound to the eye.' }),
   ];
   const back = tell(10);
   back.scenes.push({

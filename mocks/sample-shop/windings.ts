@@ -15,6 +15,7 @@ const ROWS: Record<number, Row> = {
   10: [48, 4, 1, 24, 22, 12, '2 coils a group', 'delta', 1, 2, 1.18, 811],
   11: [54, 6, 2, 54, 1, 10, 'wave, 2 bars a slot', 'star', 1, 1, 9.03, null],
   12: [48, 4, 2, 48, 12, 11, '4 coils a group', 'delta', 2, 4, 1.06, 975],
+  14: [48, 4, 2, 48, 15, 11, '4 coils a group', 'delta', 2, 3, 0.95, 880],
 };
 
 export function winding(machine: number, remark = ''): WindingReadings {
