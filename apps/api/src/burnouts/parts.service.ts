@@ -1,10 +1,10 @@
 import { Injectable } from '@nestjs/common';
+import { partLimit } from '@shared/burnout-limit';
 import type { PartLimitReason } from '@shared/burnouts';
 import type { BurnoutLimits } from '@shared/limits';
 import type { ReadingsOf } from '@shared/records';
 import { hasReached, type JobState, type Route, type Step } from '@shared/route';
 import type { QuerySource } from '../database/query-source.js';
-import { partLimit } from '../records/burnout-limit.js';
 import type { PartLimit } from './load-limit.js';
 
 interface Row {

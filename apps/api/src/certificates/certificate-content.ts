@@ -1,8 +1,8 @@
 import type { CoreTestResult } from '@libs/core-loss';
 import type { BurnoutOnPaper, CertificateModel, CoreTestOnPaper, InstrumentOnPaper, MissingBeforeTest, SignatureOnPaper, StatementOnPaper, TestRowOnPaper, VerdictOnPaper } from '@libs/documents';
+import type { StripResult } from '@shared/burnout-limit';
 import type { ReadingsOf, RecordKind } from '@shared/records';
 import type { WAIVER_REASONS } from '@shared/waivers';
-import type { StripResult } from '../records/burnout-limit.js';
 import { coreTestInput } from '../records/evaluate-record.js';
 import { RECORD_NAMES } from '../records/record-names.js';
 import type { CertifiedRecord, CertifiedSignOff } from './certificate-source.js';

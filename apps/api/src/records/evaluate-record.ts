@@ -1,8 +1,8 @@
 import { coreTestProblems, evaluateCoreTest, type BeforeTest, type CoreTestInput, type CoreTestResult } from '@libs/core-loss';
+import { burnoutProblems, judgeStrip } from '@shared/burnout-limit';
 import type { ReadingsOf, RecordInput } from '@shared/records';
 import { validBefore, waiverInForce } from '../jobs/core-standing.js';
 import { lastOf, type JobFacts } from '../jobs/job-facts.js';
-import { burnoutProblems, judgeStrip } from './burnout-limit.js';
 import { evaluateMachineTest } from './evaluate-machine-test.js';
 import { NOTHING_FOLLOWS as PLAIN, refusedFor as refused, type Evaluation, type EvaluationContext } from './evaluation.js';
 

@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { keptTest, sampleBefore, sampleJob, SAMPLE_BAY, SAMPLE_LIMITS } from '../../../test/sample-job.js';
 import { finalTestForm, levelNow, shaftHeightOf } from './final-test-form.js';
 import { problemsIn, type FormKind, type RecordContext, type RecordDefinition } from './record-definition.js';
-import { ovenProblems, stripForm, stripLimit } from './strip-form.js';
+import { stripForm, stripLimit } from './strip-form.js';
 import { differencesOf, windingAsFoundForm, windingAsWoundForm } from './winding-form.js';
 import { beforeVarnishForm, incomingTestForm } from './winding-test-forms.js';
 import { assemblyForm, coreRepairForm, dismantlingForm, treatmentForm } from './workshop-forms.js';
@@ -150,17 +150,18 @@ describe('strip and burnout', () => {
   const limit = (dismantling: Partial<ReadingsOf<'dismantling'>> | null) => stripLimit(context(dismantling ? [recorded('dismantling', { ...DISMANTLED, ...dismantling })] : []));
 
   it('holds the part to the lowest of core plate and frame; unknown counts as organic', () => {
-    expect(limit(null)).toMatchObject({ limitC: 370, because: 'unknown', dismantled: false });
-    expect(limit({ corePlate: 'organic' })).toMatchObject({ limitC: 370, because: 'organic' });
-    expect(limit({ corePlate: 'inorganic' })).toMatchObject({ limitC: 400, because: 'inorganic' });
-    expect(limit({ corePlate: 'inorganic', frameMaterial: 'aluminium' })).toMatchObject({ limitC: 300, because: 'aluminium' });
+    expect(limit(null)).toMatchObject({ limitC: 370, reason: 'core plate unknown, counted as organic', dismantled: false });
+    expect(limit({ corePlate: 'organic' })).toMatchObject({ limitC: 370, reason: 'organic core plate' });
+    expect(limit({ corePlate: 'inorganic' })).toMatchObject({ limitC: 400, reason: 'inorganic core plate' });
+    expect(limit({ corePlate: 'inorganic', frameMaterial: 'aluminium' })).toMatchObject({ limitC: 300, reason: 'aluminium frame' });
   });
 
   it('keeps the oven shut without the dismantling, the count, the sample coil, the oven’s name, or with slip rings on', () => {
     const bare: ReadingsOf<'strip'> = { ...STRIPPED, ovenId: null, commutatorOrSlipRingsOn: true, wiresCountedAtCut: null, sampleCoilKept: false };
-    expect(ovenProblems(bare, undefined).map((p) => p.path)).toEqual(['commutatorOrSlipRingsOn', 'method', 'wiresCountedAtCut', 'sampleCoilKept', 'ovenId']);
-    expect(ovenProblems({ ...bare, method: 'cold-pull' }, undefined)).toEqual([]);
-    expect(ovenProblems(STRIPPED, DISMANTLED)).toEqual([]);
+    const inTheWay = (readings: ReadingsOf<'strip'>, at = context()) => pathsOf(stripForm, stripForm.from(readings, 'si'), at).sort();
+    expect(inTheWay(bare)).toEqual(['commutatorOrSlipRingsOn', 'method', 'ovenId', 'sampleCoilKept', 'wiresCountedAtCut']);
+    expect(inTheWay({ ...bare, method: 'cold-pull' })).toEqual([]);
+    expect(inTheWay(STRIPPED, context([recorded('dismantling', DISMANTLED)]))).toEqual([]);
   });
 
   it('names no oven for a winding that was pulled', () => {

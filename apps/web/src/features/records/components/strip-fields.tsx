@@ -50,13 +50,13 @@ export function StripFields({ context, readings }: FieldsProps<'strip'>) {
 
 function StripLimitPanel({ context, peakC, method }: { readonly context: FieldsProps<'strip'>['context']; readonly peakC: number | null; readonly method: string | null }) {
   const { system } = context;
-  const { limitC, because, limits, dismantled } = stripLimit(context);
+  const { limitC, reason, limits, dismantled } = stripLimit(context);
   const over = peakC === null ? null : peakC - limitC;
   const kelvin = (k: number) => formatUsual(k, 'temperature-difference', system);
   return (
     <Panel title={t('stripLimit', { limit: formatUsual(limitC, 'temperature', system) })}>
       <div className="stack" aria-live="polite">
-        <p>{t(`because_${because}`)}</p>
+        <p>{reason}</p>
         <Thermometer limitC={limitC} peakC={peakC} system={system} />
         {over === null ? (
           <p className="muted">{method !== null && COLD.includes(method) ? t('coldNoPeak') : t('noPeak')}</p>

@@ -1,5 +1,5 @@
-import { DEFAULT_BURNOUT_LIMITS } from '@shared/limits';
-import type { ReadingsOf } from '@shared/records';
+import { DEFAULT_BURNOUT_LIMITS } from './limits.js';
+import type { ReadingsOf } from './records.js';
 import { describe, expect, it } from 'vitest';
 import { burnoutProblems, judgeStrip, partLimit } from './burnout-limit.js';
 

@@ -1,5 +1,5 @@
-import type { BurnoutLimits } from '@shared/limits';
-import type { ReadingsOf } from '@shared/records';
+import type { BurnoutLimits } from './limits.js';
+import type { ReadingsOf } from './records.js';
 
 type Strip = ReadingsOf<'strip'>;
 type Dismantling = ReadingsOf<'dismantling'>;
@@ -13,8 +13,14 @@ export interface StripResult {
   readonly ovenAllowed: boolean;
 }
 
+export interface PartLimit {
+  readonly limitC: number;
+  /** which of the limits it is, in words */
+  readonly reason: string;
+}
+
 /** The lowest limit that applies to the part: core plate, frame, and what is still attached. Unknown counts as organic. */
-export function partLimit(dismantling: Pick<Dismantling, 'corePlate' | 'frameMaterial'> | undefined, limits: BurnoutLimits): { limitC: number; reason: string } {
+export function partLimit(dismantling: Pick<Dismantling, 'corePlate' | 'frameMaterial'> | undefined, limits: BurnoutLimits): PartLimit {
   const plate = dismantling?.corePlate ?? 'unknown';
   const candidates = [
     plate === 'inorganic'
