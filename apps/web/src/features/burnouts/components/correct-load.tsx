@@ -1,0 +1,74 @@
+import { correctLoadSchema, type LoadView } from '@shared/burnouts';
+import type { BayView } from '@shared/instruments';
+import { useForm, useFormState } from 'react-hook-form';
+import { ConfirmDialog } from '../../../components/confirm-dialog.js';
+import { CheckField, SelectField, TextAreaField, TextField } from '../../../components/fields.js';
+import { QuantityField } from '../../../components/quantity-field.js';
+import { useTell } from '../../../components/toaster.js';
+import { useUnits } from '../../../components/units.js';
+import { problemsOf, showProblems, showServerProblems } from '../../../lib/form-problems.js';
+import { sendForm } from '../../../lib/send-form.js';
+import { unsaid } from '../../../lib/unsaid.js';
+import { useCorrectLoad } from '../api/load-queries.js';
+import { channelKey, correctionOf, readCorrection, type CorrectionValues } from '../load-form.js';
+import { t } from '../text.js';
+
+interface CorrectLoadProps {
+  readonly load: LoadView;
+  readonly ovens: BayView['ovens'];
+  readonly onClose: () => void;
+}
+
+/** What was said of a load, put right with a reason; its file is read again. */
+export function CorrectLoad({ load, ovens, onClose }: CorrectLoadProps) {
+  const system = useUnits();
+  const correct = useCorrectLoad(load.id);
+  const tell = useTell();
+  const form = useForm<CorrectionValues>({ defaultValues: correctionOf(load, system) });
+  const { control, setError } = form;
+  const { errors } = useFormState({ control });
+  const jobsProblem = (errors as { readonly jobs?: { readonly message?: string } }).jobs?.message;
+  const send = (values: CorrectionValues) => {
+    const { candidate, problems } = readCorrection(values, load);
+    const input = correctLoadSchema.safeParse(candidate);
+    if (problems.length > 0 || !input.success) return showProblems([...problems, ...(input.success ? [] : problemsOf(input.error))], setError);
+    correct.mutate(input.data, {
+      onSuccess: ({ number }) => {
+        tell(t('corrected', { number }));
+        onClose();
+      },
+      onError: (error) => showServerProblems(error, setError),
+    });
+  };
+  return (
+    <ConfirmDialog open title={t('correctTitle', { number: load.number })} confirm={t('saveCorrection')} pending={correct.isPending} error={unsaid(correct.error)} onConfirm={() => sendForm(form, send)} onClose={onClose}>
+      <TextField control={control} name="reason" label={t('why')} help={t('whyHelp')} />
+      <SelectField control={control} name="ovenId" label={t('oven')} ask={t('ovenAsk')} options={ovens.map((o) => ({ value: o.id, label: o.name }))} />
+      <TextField control={control} name="day" type="date" label={t('day')} />
+      <fieldset className="lb-load-choice">
+        <legend>{t('which')}</legend>
+        {jobsProblem && (
+          <div className="lb-problem" role="alert">
+            {jobsProblem}
+          </div>
+        )}
+        {load.jobs.map((job) => (
+          <CheckField key={job.jobId} control={control} name={`jobs.${job.jobId}`} label={`${job.number} · ${job.machine}`} />
+        ))}
+      </fieldset>
+      {load.file && (
+        <>
+          <fieldset className="lb-load-choice">
+            <legend>{t('whichOnPart')}</legend>
+            <div className="lb-help">{t('whichOnPartHelp')}</div>
+            {load.file.channels.map((channel, i) => (
+              <CheckField key={channel.name} control={control} name={`onPart.${channelKey(i)}`} label={channel.name} />
+            ))}
+          </fieldset>
+          <QuantityField control={control} name="offsetK" kind="temperature-difference" label={t('offsetLabel')} help={t('offsetHelp')} optional />
+        </>
+      )}
+      <TextAreaField control={control} name="remark" label={t('remark')} optional rows={2} />
+    </ConfirmDialog>
+  );
+}

@@ -1,0 +1,23 @@
+import { burnoutCurveDrawing } from '@libs/drawings';
+import type { LoadView } from '@shared/burnouts';
+import { Drawing } from '../../../components/drawing.js';
+import { limitReasonWords } from '../load-words.js';
+import { t } from '../text.js';
+
+/** The curve with its limit; of the thermocouples those on the parts, or all where none is. */
+export function LoadCurve({ load }: { readonly load: LoadView }) {
+  const { limitC } = load;
+  const read = (load.file?.channels ?? []).flatMap((c) => (c.outcome === 'read' ? [c] : []));
+  const parts = read.filter((c) => c.onPart);
+  // the hottest is drawn strong and hatched: it must be one that is judged
+  const shown = parts.length > 0 ? parts : read;
+  const drawing = burnoutCurveDrawing({
+    title: t('loadTitle', { number: load.number, oven: load.ovenName }),
+    limit: { celsius: limitC, words: t('limitWords', { limit: `${limitC} °C`, reason: limitReasonWords(load.limitReason) }) },
+    channels: shown.map((c) => {
+      const above = c.minutesAbove.find((a) => a.limitC === limitC);
+      return { name: c.name, peakC: c.peakC, points: c.curve.map(([minute, celsius]) => ({ minute, celsius })), gaps: c.gaps ?? [], aboveLimit: above ? { minutes: above.minutes, unknownMinutes: above.unknownMinutes } : null };
+    }),
+  });
+  return <Drawing drawing={drawing} withTable={t('figures')} />;
+}
