@@ -131,7 +131,6 @@ export const t = defineText({
   offsetHelp: 'For thermocouples that were found to read wrong: 11 where they read 11 K low.',
   saveCorrection: 'Save and judge anew',
   corrected: 'Load {number} is judged anew.',
-  changed: 'Somebody else changed this load meanwhile. It is shown as it stands now; correct it again if that is still needed.',
 
   jobPanel: 'Burnout loads',
   jobOthers: 'with {n} other jobs',

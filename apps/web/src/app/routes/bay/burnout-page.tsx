@@ -66,7 +66,7 @@ function Load({ load }: { readonly load: LoadView }) {
           </div>
         </Panel>
       </div>
-      {correcting && bay.data && <CorrectLoad key={load.version} load={load} ovens={bay.data.ovens} onClose={() => setCorrecting(false)} />}
+      {correcting && bay.data && <CorrectLoad load={load} ovens={bay.data.ovens} onClose={() => setCorrecting(false)} />}
     </div>
   );
 }

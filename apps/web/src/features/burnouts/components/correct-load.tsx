@@ -1,16 +1,20 @@
 import { correctLoadSchema, type LoadView } from '@shared/burnouts';
 import type { BayView } from '@shared/instruments';
+import { useState } from 'react';
 import { useForm, useFormState } from 'react-hook-form';
 import { ConfirmDialog } from '../../../components/confirm-dialog.js';
 import { CheckField, SelectField, TextAreaField, TextField } from '../../../components/fields.js';
+import { ConflictNotice } from '../../../components/notices.js';
 import { QuantityField } from '../../../components/quantity-field.js';
 import { useTell } from '../../../components/toaster.js';
 import { useUnits } from '../../../components/units.js';
 import { problemsOf, showProblems, showServerProblems } from '../../../lib/form-problems.js';
+import { ApiError } from '../../../lib/http.js';
 import { sendForm } from '../../../lib/send-form.js';
 import { unsaid } from '../../../lib/unsaid.js';
 import { useCorrectLoad } from '../api/load-queries.js';
 import { channelKey, correctionOf, readCorrection, type CorrectionValues } from '../load-form.js';
+import { differencesTo } from '../load-differences.js';
 import { t } from '../text.js';
 
 interface CorrectLoadProps {
@@ -20,16 +24,18 @@ interface CorrectLoadProps {
 }
 
 /** What was said of a load, put right with a reason; its file is read again. */
-export function CorrectLoad({ load, ovens, onClose }: CorrectLoadProps) {
+export function CorrectLoad({ load: opened, ovens, onClose }: CorrectLoadProps) {
   const system = useUnits();
-  const correct = useCorrectLoad(load.id);
+  // as it was when it was opened: a newer one that arrives meanwhile must not sweep away what is typed
+  const [load, setLoad] = useState(opened);
+  const correct = useCorrectLoad(opened.id);
   const tell = useTell();
-  const form = useForm<CorrectionValues>({ defaultValues: correctionOf(load, system) });
+  const form = useForm<CorrectionValues>({ defaultValues: correctionOf(opened, system) });
   const { control, setError } = form;
   const { errors } = useFormState({ control });
   const jobsProblem = (errors as { readonly jobs?: { readonly message?: string } }).jobs?.message;
-  const send = (values: CorrectionValues) => {
-    const { candidate, problems } = readCorrection(values, load);
+  const send = (values: CorrectionValues, version = load.version) => {
+    const { candidate, problems } = readCorrection(values, { ...load, version });
     const input = correctLoadSchema.safeParse(candidate);
     if (problems.length > 0 || !input.success) return showProblems([...problems, ...(input.success ? [] : problemsOf(input.error))], setError);
     correct.mutate(input.data, {
@@ -40,8 +46,20 @@ export function CorrectLoad({ load, ovens, onClose }: CorrectLoadProps) {
       onError: (error) => showServerProblems(error, setError),
     });
   };
+  const conflict = correct.error instanceof ApiError && correct.error.code === 'CHANGED_MEANWHILE' ? (correct.error.current as LoadView) : null;
   return (
-    <ConfirmDialog open title={t('correctTitle', { number: load.number })} confirm={t('saveCorrection')} pending={correct.isPending} error={unsaid(correct.error)} onConfirm={() => sendForm(form, send)} onClose={onClose}>
+    <ConfirmDialog open title={t('correctTitle', { number: load.number })} confirm={t('saveCorrection')} pending={correct.isPending} error={conflict ? null : unsaid(correct.error)} onConfirm={() => sendForm(form, (values) => send(values))} onClose={onClose}>
+      {conflict && (
+        <ConflictNotice
+          differences={differencesTo(conflict, form.getValues(), load, system)}
+          onTakeTheirs={() => {
+            form.reset({ ...correctionOf(conflict, system), reason: form.getValues('reason') });
+            setLoad(conflict);
+            correct.reset();
+          }}
+          onKeepMine={() => sendForm(form, (values) => send(values, conflict.version))}
+        />
+      )}
       <TextField control={control} name="reason" label={t('why')} help={t('whyHelp')} />
       <SelectField control={control} name="ovenId" label={t('oven')} ask={t('ovenAsk')} options={ovens.map((o) => ({ value: o.id, label: o.name }))} />
       <TextField control={control} name="day" type="date" label={t('day')} />
