@@ -23,6 +23,7 @@ export function ConfirmDialog({ open, title, confirm, cancel = t('cancel'), pend
   return (
     <Dialog isOpen={open} onClose={onClose} title={title}>
       <form
+        noValidate
         onSubmit={(e) => {
           e.preventDefault();
           onConfirm();

@@ -19,6 +19,12 @@ describe('an error on screen', () => {
     expect(words).toContain('Request number req-7');
   });
 
+  it('says the same words once, whether they are the error’s own or a field’s', () => {
+    render(<ErrorNotice error={new ApiError(422, 'READINGS_NOT_VALID', 'Choose the oven.', 'r', ['ovenId', 'method', 'batch'].map((path, i) => ({ path, code: 'x', message: i < 2 ? 'Choose the oven.' : 'Name the batch.' })))} />);
+    expect(screen.getAllByText('Choose the oven.')).toHaveLength(1);
+    expect(screen.getAllByRole('listitem').map((li) => li.textContent)).toEqual(['Name the batch.']);
+  });
+
   it('lists the conditions of a shut gate, each met or missing in words', () => {
     const conditions = [
       { code: 'a', met: true, words: 'Quote approved', place: null },
@@ -130,6 +136,11 @@ describe('a signature', () => {
 });
 
 describe('a question before an act', () => {
+  it('leaves the checking to the form’s own words, never to the browser’s', () => {
+    render(<ConfirmDialog open title="Hold this job?" confirm="Hold" onConfirm={vi.fn()} onClose={vi.fn()} />);
+    expect(screen.getByRole('dialog').querySelector('form')!.noValidate).toBe(true);
+  });
+
   it('acts on Enter, and on nothing else', async () => {
     const act = vi.fn();
     const close = vi.fn();

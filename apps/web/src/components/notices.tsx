@@ -25,13 +25,14 @@ export function ErrorNotice({ error }: { readonly error: unknown }) {
   if (!error) return null;
   const api = error instanceof ApiError ? error : null;
   if (api?.code === 'NOT_SIGNED_IN') return null;
+  const fields = api?.fields.filter((f, i, all) => f.message !== api.message && all.findIndex((g) => g.message === f.message) === i) ?? [];
   return (
     <Callout intent="danger" role="alert" className="lb-error">
       <p>{error instanceof Error ? error.message : String(error)}</p>
       {api && api.conditions.length > 0 && <Conditions conditions={api.conditions} />}
-      {api && api.fields.length > 0 && (
+      {fields.length > 0 && (
         <ul>
-          {api.fields.map((f) => (
+          {fields.map((f) => (
             <li key={`${f.path}${f.code}`}>{f.message}</li>
           ))}
         </ul>

@@ -31,6 +31,7 @@ export function SignDialog({ open, title, children, pending, error, onSign, onCl
   return (
     <Dialog isOpen={open} onClose={close} title={title} onClosed={() => setPassword('')}>
       <form
+        noValidate
         onSubmit={(e) => {
           e.preventDefault();
           setAsked(true);

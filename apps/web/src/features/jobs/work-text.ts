@@ -134,7 +134,7 @@ export const t = defineText({
   state: 'State',
   inForce: 'in force',
   supersededBy: 'replaced by {number}',
-  pdf: 'PDF of {paper} {number}',
+  pdf: 'Open PDF: {paper} {number}',
   openPdf: 'Open PDF',
   printTag: 'Print tag',
   tagReady: 'The tag is ready.',

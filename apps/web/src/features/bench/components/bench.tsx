@@ -14,6 +14,7 @@ import { PageHeader } from '../../../components/panel.js';
 import { useUnits } from '../../../components/units.js';
 import { ApiError, newKey } from '../../../lib/http.js';
 import { lastOfKind, readingsOf, useKeepRecord } from '../../../lib/job-records.js';
+import { unsaid } from '../../../lib/unsaid.js';
 import { beforeRecord, beforeTestOf, waiverInForce } from '../before-test.js';
 import { afterFromBefore, benchFrom, blankBench, type BenchValues, type Phase } from '../bench-form.js';
 import { liveTest, type LiveTest } from '../live-test.js';
@@ -126,7 +127,7 @@ export function Bench({ job, phase, records, limits, bay, amend, onKept }: Bench
               }}
             />
           ) : (
-            <ErrorNotice error={keep.error} />
+            <ErrorNotice error={unsaid(keep.error, form.control, (path) => path.replace(SERVER_PREFIX, ''))} />
           )}
           {amend && <TextField control={form.control} name="why" label={t('why')} help={t('whyHelp')} />}
           <div className="lb-bench-columns">

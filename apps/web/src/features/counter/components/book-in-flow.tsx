@@ -9,6 +9,7 @@ import { calendarDay } from '../../../lib/format.js';
 import { ApiError } from '../../../lib/http.js';
 import { routeName } from '../../../lib/step-names.js';
 import type { FormProblem } from '../../../lib/typed.js';
+import { unsaid } from '../../../lib/unsaid.js';
 import { useBookIn } from '../api/counter-queries.js';
 import { bookInOf, panelOf, PANELS, problemsIn, type BookInForm, type Panel } from '../book-in-form.js';
 import { CONTAMINATION_OPTIONS, contaminationName, t } from '../text.js';
@@ -101,7 +102,7 @@ export function BookInFlow({ start, draftKey, onBooked }: BookInFlowProps) {
         'promise',
         <>
           <PromiseFields form={form} />
-          <ErrorNotice error={book.error} />
+          <ErrorNotice error={unsaid(book.error, control)} />
           <div>
             <Button type="submit" intent="primary" size="large" text={t('book')} loading={book.isPending} />
           </div>

@@ -10,6 +10,8 @@ import { useTell } from '../../../components/toaster.js';
 import { checked, showServerProblems } from '../../../lib/form-problems.js';
 import { ApiError } from '../../../lib/http.js';
 import { useMay } from '../../../lib/me.js';
+import { sendForm } from '../../../lib/send-form.js';
+import { unsaid } from '../../../lib/unsaid.js';
 import { useUpdateCustomer } from '../api/customer-changes.js';
 import { customerDifferences, customerFormOf, theirsOf, type CustomerForm } from '../customer-form.js';
 import { t } from '../text.js';
@@ -42,7 +44,7 @@ function EditCustomer({ customer, onDone }: { readonly customer: CustomerView; r
   const update = useUpdateCustomer(customer.id);
   const tell = useTell();
   const form = useForm<CustomerForm>({ defaultValues: customerFormOf(customer) });
-  const { control, handleSubmit, setError, reset, getValues } = form;
+  const { control, clearErrors, handleSubmit, setError, reset, getValues } = form;
   const [basis] = useState(customer.version);
   const draft = useDraft(form, `customer:${customer.id}`, { basis });
   const [version, setVersion] = useState(customer.version);
@@ -60,7 +62,14 @@ function EditCustomer({ customer, onDone }: { readonly customer: CustomerView; r
     });
   };
   return (
-    <form className="stack" noValidate onSubmit={handleSubmit((values) => save(values, version))}>
+    <form
+      className="stack"
+      noValidate
+      onSubmit={(e) => {
+        e.preventDefault();
+        sendForm({ clearErrors, handleSubmit }, (values) => save(values, version));
+      }}
+    >
       <DraftNotice form={form} draft={draft} />
       <CustomerFields control={control} at="" />
       {theirs ? (
@@ -74,11 +83,11 @@ function EditCustomer({ customer, onDone }: { readonly customer: CustomerView; r
           }}
           onKeepMine={() => {
             setVersion(theirs.version);
-            save(getValues(), theirs.version);
+            sendForm({ clearErrors, handleSubmit }, (values) => save(values, theirs.version));
           }}
         />
       ) : (
-        <ErrorNotice error={update.error} />
+        <ErrorNotice error={unsaid(update.error, control)} />
       )}
       <div className="row">
         <Button type="submit" intent="primary" text={t('save')} loading={update.isPending} />

@@ -8,6 +8,8 @@ import { Facts, Panel } from '../../../components/panel.js';
 import { useTell } from '../../../components/toaster.js';
 import { checked, showServerProblems } from '../../../lib/form-problems.js';
 import { useMay } from '../../../lib/me.js';
+import { sendForm } from '../../../lib/send-form.js';
+import { unsaid } from '../../../lib/unsaid.js';
 import { useSetTerms } from '../api/customer-changes.js';
 import { termsOf, type TermsForm } from '../terms-form.js';
 import { t } from '../text.js';
@@ -38,7 +40,7 @@ export function CustomerTermsPanel({ customer }: { readonly customer: CustomerVi
 function EditTerms({ customer, onDone }: { readonly customer: CustomerView; readonly onDone: () => void }) {
   const setTerms = useSetTerms(customer.id);
   const tell = useTell();
-  const { control, handleSubmit, setError } = useForm<TermsForm>({ defaultValues: { terms: customer.terms, netDays: String(customer.netDays), creditStop: customer.creditStop } });
+  const { control, clearErrors, handleSubmit, setError } = useForm<TermsForm>({ defaultValues: { terms: customer.terms, netDays: String(customer.netDays), creditStop: customer.creditStop } });
   const terms = useWatch({ control, name: 'terms' });
   const save = (form: TermsForm) => {
     const wanted = termsOf(form, customer.version);
@@ -54,11 +56,18 @@ function EditTerms({ customer, onDone }: { readonly customer: CustomerView; read
     });
   };
   return (
-    <form className="stack" noValidate onSubmit={handleSubmit(save)}>
+    <form
+      className="stack"
+      noValidate
+      onSubmit={(e) => {
+        e.preventDefault();
+        sendForm({ clearErrors, handleSubmit }, save);
+      }}
+    >
       <ChoiceField control={control} name="terms" label={t('termsWords')} options={TERMS} />
       {terms === 'account' && <TextField control={control} name="netDays" label={t('netDays')} />}
       <CheckField control={control} name="creditStop" label={t('creditStop')} help={t('creditStopHelp')} />
-      <ErrorNotice error={setTerms.error} />
+      <ErrorNotice error={unsaid(setTerms.error, control)} />
       <div className="row">
         <Button type="submit" intent="primary" text={t('save')} loading={setTerms.isPending} />
         <Button text={t('cancel')} onClick={onDone} />

@@ -11,6 +11,8 @@ import { useUnits } from '../../../components/units.js';
 import { showProblems, showServerProblems } from '../../../lib/form-problems.js';
 import { ApiError } from '../../../lib/http.js';
 import { useMay } from '../../../lib/me.js';
+import { sendForm } from '../../../lib/send-form.js';
+import { unsaid } from '../../../lib/unsaid.js';
 import { useUpdateMachine } from '../api/customer-changes.js';
 import { machineDifferences, machineFormOf, machineInputOf, plateRows, theirsOf, type MachineForm } from '../machine-form.js';
 import { t } from '../text.js';
@@ -32,7 +34,7 @@ function EditMachine({ machine, onDone }: { readonly machine: MachineView; reado
   const update = useUpdateMachine(machine.id);
   const tell = useTell();
   const form = useForm<MachineForm>({ defaultValues: machineFormOf(machine, units) });
-  const { control, handleSubmit, setError, reset } = form;
+  const { control, clearErrors, handleSubmit, setError, reset } = form;
   const [basis] = useState(machine.version);
   const draft = useDraft(form, `machine:${machine.id}`, { basis });
   const [version, setVersion] = useState(machine.version);
@@ -55,7 +57,14 @@ function EditMachine({ machine, onDone }: { readonly machine: MachineView; reado
     send(read.input);
   };
   return (
-    <form className="stack" noValidate onSubmit={handleSubmit(save)}>
+    <form
+      className="stack"
+      noValidate
+      onSubmit={(e) => {
+        e.preventDefault();
+        sendForm({ clearErrors, handleSubmit }, save);
+      }}
+    >
       <DraftNotice form={form} draft={draft} />
       <NameplateFields control={control} at="" />
       {theirs && tried ? (
@@ -73,7 +82,7 @@ function EditMachine({ machine, onDone }: { readonly machine: MachineView; reado
           }}
         />
       ) : (
-        <ErrorNotice error={update.error} />
+        <ErrorNotice error={unsaid(update.error, control)} />
       )}
       <div className="row">
         <Button type="submit" intent="primary" text={t('save')} loading={update.isPending} />

@@ -6,6 +6,8 @@ import { DraftNotice, useDraft } from '../../../components/draft.js';
 import { ErrorNotice } from '../../../components/notices.js';
 import { Panel } from '../../../components/panel.js';
 import { checked, showServerProblems } from '../../../lib/form-problems.js';
+import { sendForm } from '../../../lib/send-form.js';
+import { unsaid } from '../../../lib/unsaid.js';
 import { useCreateCustomer } from '../api/customer-changes.js';
 import { emptyCustomer, type CustomerForm } from '../customer-form.js';
 import { t } from '../text.js';
@@ -14,7 +16,7 @@ import { t } from '../text.js';
 export function NewCustomer({ onMade }: { readonly onMade: (id: string) => void }) {
   const create = useCreateCustomer();
   const form = useForm<CustomerForm>({ defaultValues: emptyCustomer() });
-  const { control, handleSubmit, setError } = form;
+  const { control, clearErrors, handleSubmit, setError } = form;
   const draft = useDraft(form, 'customer:new');
   const save = (values: CustomerForm) => {
     const input = checked(createCustomerSchema, values, setError);
@@ -29,10 +31,17 @@ export function NewCustomer({ onMade }: { readonly onMade: (id: string) => void 
   };
   return (
     <Panel>
-      <form className="stack" noValidate onSubmit={handleSubmit(save)}>
+      <form
+        className="stack"
+        noValidate
+        onSubmit={(e) => {
+          e.preventDefault();
+          sendForm({ clearErrors, handleSubmit }, save);
+        }}
+      >
         <DraftNotice form={form} draft={draft} />
         <CustomerFields control={control} at="" />
-        <ErrorNotice error={create.error} />
+        <ErrorNotice error={unsaid(create.error, control)} />
         <div>
           <Button type="submit" intent="primary" text={t('save')} loading={create.isPending} />
         </div>

@@ -11,6 +11,8 @@ import { useTell } from '../../../components/toaster.js';
 import { useUnits } from '../../../components/units.js';
 import { checked, showServerProblems } from '../../../lib/form-problems.js';
 import { useMay } from '../../../lib/me.js';
+import { sendForm } from '../../../lib/send-form.js';
+import { unsaid } from '../../../lib/unsaid.js';
 import { useIssueCertificate } from '../api/job-changes.js';
 import { t } from '../work-text.js';
 
@@ -56,20 +58,27 @@ function IssueForm({ job, replaces }: { readonly job: JobSheet; readonly replace
   const units = useUnits();
   const issue = useIssueCertificate(job.id);
   const tell = useTell();
-  const { control, handleSubmit, setError } = useForm<Omit<IssueCertificate, 'jobVersion'>>({ defaultValues: { paperSize: units === 'si' ? 'A4' : 'Letter', units, reason: '' } });
+  const { control, clearErrors, handleSubmit, setError } = useForm<Omit<IssueCertificate, 'jobVersion'>>({ defaultValues: { paperSize: units === 'si' ? 'A4' : 'Letter', units, reason: '' } });
   const send = (form: Omit<IssueCertificate, 'jobVersion'>) => {
     if (replaces !== null && form.reason.trim() === '') return setError('reason', { message: t('replaceEmpty') }, { shouldFocus: true });
     const input = checked(issueCertificateSchema, { ...form, jobVersion: job.version }, setError);
     if (input) issue.mutate(input, { onSuccess: (paper) => tell(t('issued', { number: paper.number })), onError: (error) => showServerProblems(error, setError) });
   };
   return (
-    <form className="stack" noValidate onSubmit={handleSubmit(send)}>
+    <form
+      className="stack"
+      noValidate
+      onSubmit={(e) => {
+        e.preventDefault();
+        sendForm({ clearErrors, handleSubmit }, send);
+      }}
+    >
       <div className="fields">
         <ChoiceField control={control} name="paperSize" label={t('paperSize')} options={SIZES} />
         <ChoiceField control={control} name="units" label={t('units')} options={UNITS} />
         {replaces !== null && <TextField control={control} name="reason" label={t('replaceReason')} help={t('replaceHelp')} wide />}
       </div>
-      <ErrorNotice error={issue.error} />
+      <ErrorNotice error={unsaid(issue.error, control)} />
       <div>
         <Button type="submit" intent={replaces === null ? 'primary' : 'none'} text={replaces === null ? t('certificateIssue') : t('certificateReplace')} loading={issue.isPending} />
       </div>

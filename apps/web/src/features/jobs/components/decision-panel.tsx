@@ -8,6 +8,8 @@ import { ConfirmDialog } from '../../../components/confirm-dialog.js';
 import { ChoiceField, SelectField, TextAreaField, TextField } from '../../../components/fields.js';
 import { checked, showServerProblems } from '../../../lib/form-problems.js';
 import { useMay } from '../../../lib/me.js';
+import { sendForm } from '../../../lib/send-form.js';
+import { unsaid } from '../../../lib/unsaid.js';
 import { useRecordDecision } from '../api/job-changes.js';
 import { channelName, choiceName, CHOICES } from '../decision-form.js';
 import { decisionStanding } from '../sign-off-standing.js';
@@ -54,20 +56,20 @@ const CHANNELS = (['phone', 'e-mail', 'in-person'] as const).map((value) => ({ v
 
 function DecisionDialog({ jobId, recordId, about, onClose }: DialogProps) {
   const record = useRecordDecision(jobId);
-  const { control, handleSubmit, setError } = useForm<Pick<RecordDecision, 'answeredBy' | 'words'> & { choice: string | null; channel: string | null }>({ defaultValues: { choice: null, answeredBy: '', channel: null, words: '' } });
+  const { control, clearErrors, handleSubmit, setError } = useForm<Pick<RecordDecision, 'answeredBy' | 'words'> & { choice: string | null; channel: string | null }>({ defaultValues: { choice: null, answeredBy: '', channel: null, words: '' } });
   return (
     <ConfirmDialog
       open
       title={t('decision')}
       confirm={t('saveDecision')}
       pending={record.isPending}
-      error={record.error}
+      error={unsaid(record.error, control)}
       onClose={onClose}
       onConfirm={() =>
-        void handleSubmit((form) => {
+        sendForm({ clearErrors, handleSubmit }, (form) => {
           const input = checked(recordDecisionSchema, { recordId, about, ...form }, setError);
           if (input) record.mutate(input, { onSuccess: onClose, onError: (error) => showServerProblems(error, setError) });
-        })()
+        })
       }
     >
       <SelectField control={control} name="choice" label={t('choice')} options={CHOICES[about].map((value) => ({ value, label: choiceName(value) }))} ask={t('choose')} />

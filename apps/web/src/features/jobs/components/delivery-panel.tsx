@@ -8,6 +8,8 @@ import { Panel } from '../../../components/panel.js';
 import { checked, showServerProblems } from '../../../lib/form-problems.js';
 import { momentOf } from '../../../lib/format.js';
 import { useMay } from '../../../lib/me.js';
+import { sendForm } from '../../../lib/send-form.js';
+import { unsaid } from '../../../lib/unsaid.js';
 import { useRecordDelivery } from '../api/job-changes.js';
 import { t } from '../work-text.js';
 
@@ -49,20 +51,23 @@ const stillMissing = (job: JobSheet) => (job.gates.find((g) => g.gate === 'relea
 
 function DeliveryForm({ job }: { readonly job: JobSheet }) {
   const deliver = useRecordDelivery(job.id);
-  const { control, handleSubmit, setError } = useForm({ defaultValues: { receivedBy: '', words: '' } });
+  const { control, clearErrors, handleSubmit, setError } = useForm({ defaultValues: { receivedBy: '', words: '' } });
   return (
     <form
       className="stack"
       noValidate
-      onSubmit={handleSubmit((form) => {
-        const input = checked(recordDeliverySchema, { ...form, version: job.version }, setError);
-        if (input) deliver.mutate(input, { onError: (error) => showServerProblems(error, setError) });
-      })}
+      onSubmit={(e) => {
+        e.preventDefault();
+        sendForm({ clearErrors, handleSubmit }, (form) => {
+          const input = checked(recordDeliverySchema, { ...form, version: job.version }, setError);
+          if (input) deliver.mutate(input, { onError: (error) => showServerProblems(error, setError) });
+        });
+      }}
     >
       <p>{t('deliveryWords')}</p>
       <TextField control={control} name="receivedBy" label={t('receivedBy')} />
       <TextAreaField control={control} name="words" label={t('deliveryRemark')} optional rows={2} />
-      <ErrorNotice error={deliver.error} />
+      <ErrorNotice error={unsaid(deliver.error, control)} />
       <div>
         <Button type="submit" intent="primary" text={t('deliver')} loading={deliver.isPending} />
       </div>

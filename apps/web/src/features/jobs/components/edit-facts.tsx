@@ -8,6 +8,8 @@ import { ConflictNotice, ErrorNotice } from '../../../components/notices.js';
 import { useTell } from '../../../components/toaster.js';
 import { checked, showServerProblems } from '../../../lib/form-problems.js';
 import { ApiError } from '../../../lib/http.js';
+import { sendForm } from '../../../lib/send-form.js';
+import { unsaid } from '../../../lib/unsaid.js';
 import { useUpdateJob } from '../api/job-changes.js';
 import { differencesOf, theirsOf } from '../facts-conflict.js';
 import { factsFormOf, isEnded, type FactsForm } from '../move-form.js';
@@ -20,7 +22,7 @@ export function EditFacts({ job, onDone }: { readonly job: JobSheet; readonly on
   const update = useUpdateJob(job.id);
   const tell = useTell();
   const form = useForm<FactsForm>({ defaultValues: factsFormOf(job) });
-  const { control, handleSubmit, setError, reset, getValues } = form;
+  const { control, clearErrors, handleSubmit, setError, reset, getValues } = form;
   const [basis] = useState(job.version);
   const draft = useDraft(form, `job-facts:${job.id}`, { basis });
   // the version the person has read: a refreshed sheet must not turn their save into a silent overwrite
@@ -39,7 +41,14 @@ export function EditFacts({ job, onDone }: { readonly job: JobSheet; readonly on
     });
   };
   return (
-    <form className="stack" noValidate onSubmit={handleSubmit((values) => save(values, version))}>
+    <form
+      className="stack"
+      noValidate
+      onSubmit={(e) => {
+        e.preventDefault();
+        sendForm({ clearErrors, handleSubmit }, (values) => save(values, version));
+      }}
+    >
       <DraftNotice form={form} draft={draft} />
       {isEnded(job) && <p className="muted">{t('onlyReference')}</p>}
       <div className="fields">
@@ -61,11 +70,11 @@ export function EditFacts({ job, onDone }: { readonly job: JobSheet; readonly on
           }}
           onKeepMine={() => {
             setVersion(conflict.version);
-            save(getValues(), conflict.version);
+            sendForm({ clearErrors, handleSubmit }, (values) => save(values, conflict.version));
           }}
         />
       ) : (
-        <ErrorNotice error={update.error} />
+        <ErrorNotice error={unsaid(update.error, control)} />
       )}
       <div className="row">
         <Button type="submit" intent="primary" text={t('save')} loading={update.isPending} />

@@ -4,6 +4,8 @@ import { ConfirmDialog } from '../../../components/confirm-dialog.js';
 import { ChoiceField, TextAreaField, TextField } from '../../../components/fields.js';
 import { useTell } from '../../../components/toaster.js';
 import { checked, showServerProblems } from '../../../lib/form-problems.js';
+import { sendForm } from '../../../lib/send-form.js';
+import { unsaid } from '../../../lib/unsaid.js';
 import { useEndJob } from '../api/job-changes.js';
 import { endOf, type EndForm } from '../move-form.js';
 import { t } from '../text.js';
@@ -16,7 +18,7 @@ const HOWS = (['phone', 'e-mail', 'in-person', 'portal'] as const).map((value) =
 export function EndDialog({ job, onClose }: JobDialogProps) {
   const end = useEndJob(job.id);
   const tell = useTell();
-  const { control, handleSubmit, setError } = useForm<EndForm>({ defaultValues: { end: null, consentBy: '', consentHow: null, words: '' } });
+  const { control, clearErrors, handleSubmit, setError } = useForm<EndForm>({ defaultValues: { end: null, consentBy: '', consentHow: null, words: '' } });
   const send = (form: EndForm) => {
     const input = checked(endJobSchema, endOf(form, job.version), setError);
     if (!input) return;
@@ -29,7 +31,7 @@ export function EndDialog({ job, onClose }: JobDialogProps) {
     });
   };
   return (
-    <ConfirmDialog open title={t('endTitle')} confirm={t('endConfirm')} pending={end.isPending} error={end.error} onConfirm={() => void handleSubmit(send)()} onClose={onClose}>
+    <ConfirmDialog open title={t('endTitle')} confirm={t('endConfirm')} pending={end.isPending} error={unsaid(end.error, control)} onConfirm={() => sendForm({ clearErrors, handleSubmit }, send)} onClose={onClose}>
       <p>{t('endWords')}</p>
       <ChoiceField control={control} name="end" label={t('endHow')} options={ENDS} />
       <TextField control={control} name="consentBy" label={t('consentBy')} />

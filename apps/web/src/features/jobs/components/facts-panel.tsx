@@ -11,6 +11,8 @@ import { calendarDay } from '../../../lib/format.js';
 import { checked, showServerProblems } from '../../../lib/form-problems.js';
 import { useMay } from '../../../lib/me.js';
 import { plateLine } from '../../../lib/plate-words.js';
+import { sendForm } from '../../../lib/send-form.js';
+import { unsaid } from '../../../lib/unsaid.js';
 import { useMoveLimits } from '../api/job-changes.js';
 import { limitsVersionsQuery } from '../api/limits-query.js';
 import { isEnded } from '../move-form.js';
@@ -59,13 +61,13 @@ export function FactsPanel({ job }: { readonly job: JobSheet }) {
 
 function NewerLimits({ job, onClose }: { readonly job: JobSheet; readonly onClose: () => void }) {
   const move = useMoveLimits(job.id);
-  const { control, handleSubmit, setError } = useForm({ defaultValues: { reason: '' } });
+  const { control, clearErrors, handleSubmit, setError } = useForm({ defaultValues: { reason: '' } });
   const send = ({ reason }: { reason: string }) => {
     const input = checked(moveLimitsSchema, { version: job.version, reason }, setError);
     if (input) move.mutate(input, { onSuccess: onClose, onError: (error) => showServerProblems(error, setError) });
   };
   return (
-    <ConfirmDialog open title={t('newerLimitsTitle')} confirm={t('newerLimitsConfirm')} pending={move.isPending} error={move.error} onClose={onClose} onConfirm={() => void handleSubmit(send)()}>
+    <ConfirmDialog open title={t('newerLimitsTitle')} confirm={t('newerLimitsConfirm')} pending={move.isPending} error={unsaid(move.error, control)} onClose={onClose} onConfirm={() => sendForm({ clearErrors, handleSubmit }, send)}>
       <p>{t('newerLimitsWords')}</p>
       <TextField control={control} name="reason" label={t('why')} />
     </ConfirmDialog>

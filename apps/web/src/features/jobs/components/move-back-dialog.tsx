@@ -4,7 +4,9 @@ import { ConfirmDialog } from '../../../components/confirm-dialog.js';
 import { SelectField, TextField } from '../../../components/fields.js';
 import { useTell } from '../../../components/toaster.js';
 import { checked, showServerProblems } from '../../../lib/form-problems.js';
+import { sendForm } from '../../../lib/send-form.js';
 import { stepName } from '../../../lib/step-names.js';
+import { unsaid } from '../../../lib/unsaid.js';
 import { useMoveJob } from '../api/job-changes.js';
 import { moveBackOf, stepsBehind, type MoveBackForm } from '../move-form.js';
 import { t } from '../text.js';
@@ -19,7 +21,7 @@ export function MoveBackDialog({ job, onClose }: JobDialogProps) {
   const move = useMoveJob(job.id);
   const tell = useTell();
   const behind = stepsBehind(job.route, job.step);
-  const { control, handleSubmit, setError } = useForm<MoveBackForm>({ defaultValues: { to: behind[0] ?? null, why: '' } });
+  const { control, clearErrors, handleSubmit, setError } = useForm<MoveBackForm>({ defaultValues: { to: behind[0] ?? null, why: '' } });
   const send = (form: MoveBackForm) => {
     const input = checked(moveJobSchema, moveBackOf(form, job.version), setError);
     if (!input) return;
@@ -32,7 +34,7 @@ export function MoveBackDialog({ job, onClose }: JobDialogProps) {
     });
   };
   return (
-    <ConfirmDialog open title={t('backTitle')} confirm={t('backConfirm')} pending={move.isPending} error={move.error} onConfirm={() => void handleSubmit(send)()} onClose={onClose}>
+    <ConfirmDialog open title={t('backTitle')} confirm={t('backConfirm')} pending={move.isPending} error={unsaid(move.error, control)} onConfirm={() => sendForm({ clearErrors, handleSubmit }, send)} onClose={onClose}>
       <p>{t('backWords')}</p>
       <SelectField control={control} name="to" label={t('backTo')} options={behind.map((step) => ({ value: step, label: stepName(step) }))} />
       <TextField control={control} name="why" label={t('why')} />

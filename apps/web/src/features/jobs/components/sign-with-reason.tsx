@@ -20,14 +20,16 @@ interface SignWithReasonProps {
 export function SignWithReason({ title, label, emptyWords, children, pending, error, onSign, onClose }: SignWithReasonProps) {
   const [reason, setReason] = useState('');
   const [asked, setAsked] = useState(false);
-  const fromServer = error instanceof ApiError ? error.fields.find((f) => f.path === 'reason' || f.path === 'remark')?.message : undefined;
+  const ofReason = (path: string) => path === 'reason' || path === 'remark';
+  const onlyOfReason = error instanceof ApiError && error.fields.length > 0 && error.fields.every((f) => ofReason(f.path));
+  const fromServer = error instanceof ApiError ? error.fields.find((f) => ofReason(f.path))?.message : undefined;
   const problem = fromServer ?? (asked && emptyWords !== undefined && reason.trim() === '' ? emptyWords : undefined);
   return (
     <SignDialog
       open
       title={title}
       pending={pending}
-      error={error}
+      error={onlyOfReason ? null : error}
       onClose={onClose}
       onSign={(password) => {
         setAsked(true);

@@ -8,6 +8,8 @@ import { SelectField, TextAreaField } from '../../../components/fields.js';
 import { Fold } from '../../../components/fold.js';
 import { checked, showServerProblems } from '../../../lib/form-problems.js';
 import { useMay } from '../../../lib/me.js';
+import { sendForm } from '../../../lib/send-form.js';
+import { unsaid } from '../../../lib/unsaid.js';
 import { useAskWaiver, useCountersign } from '../api/job-changes.js';
 import { waiverStanding } from '../sign-off-standing.js';
 import { t } from '../work-text.js';
@@ -53,20 +55,20 @@ export function WaiverPanel({ job, testMade }: { readonly job: JobSheet; readonl
 
 function AskWaiverDialog({ jobId, onClose }: { readonly jobId: string; readonly onClose: () => void }) {
   const ask = useAskWaiver(jobId);
-  const { control, handleSubmit, setError } = useForm<{ reason: AskWaiver['reason'] | null; words: string }>({ defaultValues: { reason: null, words: '' } });
+  const { control, clearErrors, handleSubmit, setError } = useForm<{ reason: AskWaiver['reason'] | null; words: string }>({ defaultValues: { reason: null, words: '' } });
   return (
     <ConfirmDialog
       open
       title={t('waiver')}
       confirm={t('waiverSend')}
       pending={ask.isPending}
-      error={ask.error}
+      error={unsaid(ask.error, control)}
       onClose={onClose}
       onConfirm={() =>
-        void handleSubmit((form) => {
+        sendForm({ clearErrors, handleSubmit }, (form) => {
           const input = checked(askWaiverSchema, form, setError);
           if (input) ask.mutate(input, { onSuccess: onClose, onError: (error) => showServerProblems(error, setError) });
-        })()
+        })
       }
     >
       <p>{t('waiverWords')}</p>

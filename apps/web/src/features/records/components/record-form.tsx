@@ -11,6 +11,7 @@ import { PageHeader } from '../../../components/panel.js';
 import { ApiError, newKey } from '../../../lib/http.js';
 import { readingsOf, recordsOfKind, useKeepRecord } from '../../../lib/job-records.js';
 import { recordName } from '../../../lib/record-names.js';
+import { unsaid } from '../../../lib/unsaid.js';
 import { changesBetween } from '../reading-words.js';
 import { problemsIn, type FormKind, type RecordContext, type RecordDefinition } from '../record-definition.js';
 import { t } from '../text.js';
@@ -108,7 +109,7 @@ export function RecordForm<K extends FormKind, V extends object>({ definition, F
               }}
             />
           ) : (
-            <ErrorNotice error={keep.error} />
+            <ErrorNotice error={unsaid(keep.error, form.control, (path) => path.replace(SERVER_PREFIX, ''))} />
           )}
           {amend && <TextField control={form.control} name="why" label={t('why')} help={t('whyHelp')} />}
           <Fields context={context} readings={filled.readings} />
