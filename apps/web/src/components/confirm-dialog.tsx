@@ -26,6 +26,8 @@ export function ConfirmDialog({ open, title, confirm, cancel = t('cancel'), pend
         noValidate
         onSubmit={(e) => {
           e.preventDefault();
+          // the form behind the dialog is not what was answered
+          e.stopPropagation();
           onConfirm();
         }}
       >

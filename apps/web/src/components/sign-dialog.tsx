@@ -34,6 +34,8 @@ export function SignDialog({ open, title, children, pending, error, onSign, onCl
         noValidate
         onSubmit={(e) => {
           e.preventDefault();
+          // the form behind the dialog is not what was answered
+          e.stopPropagation();
           setAsked(true);
           if (password !== '') onSign(password);
         }}
