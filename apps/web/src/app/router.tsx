@@ -11,6 +11,7 @@ import { accountsRoutes } from './routes/accounts-routes.js';
 import { bayRoutes } from './routes/bay-routes.js';
 import { checkRoutes } from './routes/check-routes.js';
 import { counterRoutes } from './routes/counter-routes.js';
+import { insightRoutes } from './routes/insight-routes.js';
 import { jobRoutes } from './routes/job-routes.js';
 import { portalRoutes } from './routes/portal-routes.js';
 import { shopRoutes } from './routes/shop-routes.js';
@@ -34,11 +35,12 @@ async function toHome(): Promise<Response> {
 }
 
 const inside: RouteObject[] = [
-  { index: true, loader: toHome },
+  { index: true, loader: toHome, Component: Waiting },
   ...jobRoutes,
   ...counterRoutes,
   ...bayRoutes,
   ...accountsRoutes,
+  ...insightRoutes,
   ...shopRoutes,
   ...portalRoutes,
   { path: '*', Component: NotFoundPage },

@@ -20,8 +20,17 @@ export function roomsOf(me: Me): Room[] {
     { path: '/counter', name: t('counter'), open: may('jobs.book') },
     { path: '/bay', name: t('bay'), open: may('records.write') },
     { path: '/accounts', name: t('accounts'), open: may('quotes.read') },
+    { path: '/insight', name: t('insight'), open: may('insight.read') },
     { path: '/shop', name: t('shop'), open: may('limits.read') },
   ].filter((room) => room.open);
+}
+
+const STAFF_PLACES = new Set(['floor', 'counter', 'bay', 'accounts', 'shop', 'jobs', 'records']);
+
+/** Whether a page is for this side of the counter: customers have the portal, the shop has the rest. */
+export function isOpenTo(me: Me, pathname: string): boolean {
+  const place = pathname.split('/')[1] ?? '';
+  return me.roles.includes('customer') ? !STAFF_PLACES.has(place) : place !== 'portal';
 }
 
 /** Where somebody starts the day. */

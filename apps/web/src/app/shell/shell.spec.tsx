@@ -8,7 +8,7 @@ import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import { z } from 'zod';
 import { http } from '../../lib/http.js';
 import { NotFoundPage } from '../routes/error-page.js';
-import { roomsOf } from './rooms.js';
+import { isOpenTo, roomsOf } from './rooms.js';
 import { setSingleKeys } from './single-keys.js';
 import { Shell } from './shell.js';
 
@@ -78,9 +78,18 @@ afterEach(() => vi.unstubAllGlobals());
 describe('the frame around every page', () => {
   it('shows each person the rooms they may enter', () => {
     const names = (roles: Me['roles']) => roomsOf({ ...manager, roles, permissions: permissionsOf(roles) }).map((room) => room.name);
-    expect(names(['manager'])).toEqual(['Floor', 'Counter', 'Bay', 'Accounts', 'Shop']);
-    expect(names(['technician'])).toEqual(['Floor', 'Bay', 'Shop']);
+    expect(names(['manager'])).toEqual(['Floor', 'Counter', 'Bay', 'Accounts', 'Insight', 'Shop']);
+    expect(names(['technician'])).toEqual(['Floor', 'Bay', 'Insight', 'Shop']);
     expect(names(['customer'])).toEqual(['Overview', 'Your machines']);
+  });
+
+  it('keeps customers out of the shop’s pages, and says so instead of showing empty ones', async () => {
+    const router = open({ ...manager, roles: ['customer'], permissions: permissionsOf(['customer']) });
+    expect(screen.getByRole('heading', { level: 1 }).textContent).toBe('Your roles do not open this page');
+    await act(() => router.navigate('/nowhere'));
+    expect(screen.getByRole('heading', { level: 1 }).textContent).toBe('There is nothing at this address');
+    const staff = (path: string) => isOpenTo(manager, path);
+    expect(['/floor', '/jobs/01a', '/', '/portal', '/portal/jobs/01a'].map(staff)).toEqual([true, true, true, false, false]);
   });
 
   it('takes the theme a person has chosen', () => {

@@ -6,6 +6,7 @@ export const t = defineText({
   counter: 'Counter',
   bay: 'Bay',
   accounts: 'Accounts',
+  insight: 'Insight',
   shop: 'Shop',
   portal: 'Your machines',
   portalHome: 'Overview',
