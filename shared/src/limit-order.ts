@@ -46,10 +46,11 @@ export interface OutOfOrder {
   readonly message: string;
 }
 
-/** Figures that contradict one another, each said at the one that should be lower. */
-export function outOfOrder(valueAt: (path: string) => number): OutOfOrder[] {
+/** Figures that contradict one another, each said at the one that should be lower; one that is missing contradicts none. */
+export function outOfOrder(valueAt: (path: string) => unknown): OutOfOrder[] {
   return AT.flatMap(([lower, higher, strictly]) => {
     const [low, high] = [valueAt(lower), valueAt(higher)];
+    if (typeof low !== 'number' || typeof high !== 'number') return [];
     if (low < high || (!strictly && low === high)) return [];
     return [{ path: lower, message: `${strictly ? 'Must be below' : 'Not above'}: ${rowAt(higher).name.charAt(0).toLowerCase()}${rowAt(higher).name.slice(1)}.` }];
   });

@@ -75,8 +75,7 @@ const setSchema = z.strictObject({
 
 /** A whole set of limits as a person sets it: every figure there, possible at all, and none contradicting another. */
 export const limitsSetSchema = setSchema.superRefine((set, context) => {
-  const valueAt = (path: string) => at(set, path) as number;
-  for (const { path, message } of outOfOrder(valueAt)) context.addIssue({ code: 'custom', path: path.split('.'), message });
+  for (const { path, message } of outOfOrder((path) => at(set, path))) context.addIssue({ code: 'custom', path: path.split('.'), message });
 });
 
 /** A new version: on which one it is built, why, and the set. */

@@ -19,18 +19,19 @@ const versions = async () => (await house.staff.manager.get('/api/limits').expec
 const inForce = async () => (await versions())[0]!;
 
 /** The set in force as a person would send it back, with some places changed. */
-async function changed(...places: readonly (readonly [path: string, value: unknown])[]) {
+type Place = readonly [path: string, value: unknown];
+async function changed(...places: Place[]) {
   const { version, set } = await inForce();
   const { burnout, ...rest } = set as { burnout: Record<string, unknown> };
   const { source: _source, standing: _standing, ...strip } = burnout;
   return { baseVersion: version, note: 'Decided by the shop’s engineer.', set: places.reduce<unknown>((s, [path, value]) => withAt(s, path.split('.') as Path, value), { ...rest, burnout: strip }) };
 }
-const publish = async (...places: Parameters<typeof changed>) => house.staff.manager.post('/api/limits', await changed(...places));
-const TIGHTER = [
+const publish = async (...places: Place[]) => house.staff.manager.post('/api/limits', await changed(...places));
+const TIGHTER: Place[] = [
   ['core.increaseLimit', 0.15],
   ['core.increaseWarn', 0.08],
   ['core.sources.increase', { source: 'Shop practice: 15 % since the large-machine contract', standing: 'C' }],
-] as const;
+];
 const fieldsOf = (answer: { body: { fields?: { path: string; message: string }[] } }) => (answer.body.fields ?? []).map((f) => f.path);
 
 describe('publishing limits', () => {
@@ -103,7 +104,7 @@ describe('what the contract refuses, at the field it is wrong in', () => {
     ['a warning over its limit', 'core.hotSpotWarnK', 30, 'set.core.hotSpotWarnK'],
     ['an organic core plate hotter than an inorganic one', 'burnout.organicOrUnknownC', 450, 'set.burnout.organicOrUnknownC'],
     ['a key nobody knows', 'core.increaseLimmit', 0.1, 'set.core'],
-  ])('%s', async (_what, path, value, field) => {
+  ] as [string, string, unknown, string][])('%s', async (_what, path, value, field) => {
     const answer = await publish([path, value]);
     expect(answer.status).toBe(400);
     expect(fieldsOf(answer)).toEqual([field]);

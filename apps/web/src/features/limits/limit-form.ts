@@ -1,5 +1,6 @@
 import type { UnitSystem } from '@libs/quantities';
 import { sourcesToLookAt } from '@shared/limit-differences';
+import { outOfOrder } from '@shared/limit-order';
 import { LIMIT_ROWS, RULE_PATH, type LimitRow } from '@shared/limit-rows';
 import { at, ruleOf, sourceOf, valueOf, type LimitSourceText } from '@shared/limit-values';
 import { publishLimitsSchema, STANDINGS, type LimitsVersionView, type PublishLimits } from '@shared/limits';
@@ -83,8 +84,10 @@ export function readLimits(form: LimitForm, base: LimitsVersionView, words: { re
   const confirmedSources = SOURCE_PATHS.filter((path) => form.confirmed[confirmedKey(path)] === true);
   const parsed = publishLimitsSchema.safeParse({ baseVersion: base.version, note: form.note, set, confirmedSources });
   const open = sourcesToLookAt(base.set, set, confirmedSources).map((path) => ({ path: `set.${path}.source`, message: words.lookAtSource }));
+  // the contract looks at the order only when all is there; a person wants to hear everything at once
+  const order = outOfOrder((path) => at(set, path)).map(({ path, message }) => ({ path: `set.${path}`, message }));
   const seen = new Set<string>();
-  const problems = [...reader.problems, ...(parsed.success ? [] : problemsOf(parsed.error)), ...open].filter(({ path }) => !seen.has(path) && seen.add(path));
+  const problems = [...reader.problems, ...(parsed.success ? [] : problemsOf(parsed.error)), ...order, ...open].filter(({ path }) => !seen.has(path) && seen.add(path));
   return { input: problems.length === 0 && parsed.success ? parsed.data : null, problems };
 }
 

@@ -64,12 +64,12 @@ export function LimitsEditor({ versions, onPublished, onCancel }: EditorProps) {
     if (!unchanged) setReady(input);
   };
   const onTheirs = () => {
-    if (!merged) return;
+    const mine = onTopOf(getValues(), base, newest, units);
     // kept as typed: the draft goes on from here
-    reset(merged, { keepDefaultValues: true });
+    reset(mine, { keepDefaultValues: true });
     form.setValue('baseVersion', newest.version, { shouldDirty: true });
     publish.reset();
-    review(merged, newest);
+    review(mine, newest);
   };
   const takeTheirs = () => {
     draft.forget();
