@@ -13,6 +13,10 @@ const t = defineText({
   read: 'read as {value}',
 });
 
+/** Below a tenth of an ohm the usual digits end before two windings differ: such a resistance is said in milliohms. */
+const SMALL_OHM = 0.1;
+const isSmallOhm = (si: number, kind: Kind) => kind === 'resistance' && si !== 0 && Math.abs(si) < SMALL_OHM;
+
 interface QuantityFieldProps<F extends FieldValues> {
   readonly control: Control<F>;
   readonly name: FieldPath<F>;
@@ -32,9 +36,9 @@ export function QuantityField<F extends FieldValues>({ control, name, label, kin
   const [confirmed, setConfirmed] = useState<number | null>(null);
   const typed = field.value as Typed;
   const reading = readTyped(typed, kind);
-  const words = (si: number) => formatUsual(si, kind, system);
+  const words = (si: number) => formatUsual(si, isSmallOhm(si, kind) ? 'resistance-milli' : kind, system);
   const odd = reading.state === 'read' && usual !== undefined && (reading.si < usual[0] || reading.si > usual[1]) && reading.si !== confirmed;
-  const pasted = reading.state === 'read' && typed.system === system && /[a-zµΩ°"½¼¾⅛⅜⅝⅞/]/i.test(typed.text);
+  const pasted = reading.state === 'read' && typed.system === system && (isSmallOhm(reading.si, kind) || /[a-zµΩ°"½¼¾⅛⅜⅝⅞/]/i.test(typed.text));
   const problem = fieldState.error?.message ?? (reading.state === 'wrong' && fieldState.isTouched ? reading.words : undefined);
   const unit = unitOf(kind, system);
   const question = odd && (

@@ -1,6 +1,7 @@
 import { insulationTestVolts, type InsulationReading, type WindingResistanceReading } from '@libs/machine-tests';
 import type { UnitSystem } from '@libs/quantities';
 import type { JobSheet } from '@shared/jobs';
+import type { EarlierTests } from './earlier-tests.js';
 import { typedFrom, untyped, type FormReader, type Typed } from '../../lib/typed.js';
 
 export interface InsulationValues {
@@ -13,20 +14,27 @@ export interface InsulationValues {
   tenMinuteResistanceOhm: Typed;
 }
 
-/** What the nameplate says of the winding; machines of a thousand volts and more are form-wound as a rule. */
-export function blankInsulation({ nameplate }: JobSheet['machine'], system: UnitSystem): InsulationValues {
-  const volts = nameplate.ratedVoltageV;
-  const windingKind = nameplate.kind === 'dc' ? 'dc-armature' : nameplate.kind === 'ac-magnet' ? 'field' : volts !== null && volts >= 1000 ? 'form-wound' : 'random-wound';
+/** From a thousand volts on a winding is made of formed coils as a rule. */
+const FORM_WOUND_FROM_V = 1000;
+
+/** What an earlier test of this job or else the nameplate says of the winding; readings are taken anew. */
+export function blankInsulation({ nameplate }: JobSheet['machine'], system: UnitSystem, earlier: EarlierTests): InsulationValues {
+  const volts = earlier.insulation?.ratedVoltageV ?? nameplate.ratedVoltageV;
+  const windingKind = nameplate.kind === 'dc' ? 'dc-armature' : nameplate.kind === 'ac-magnet' ? 'field' : volts !== null && volts >= FORM_WOUND_FROM_V ? 'form-wound' : 'random-wound';
   return {
-    windingKind,
+    windingKind: earlier.insulation?.windingKind ?? windingKind,
     ratedVoltageV: typedFrom(volts, 'voltage', system),
     testVoltsV: typedFrom(volts === null ? null : insulationTestVolts(volts).leastV, 'voltage', system),
     resistanceOhm: untyped(system),
     windingTemperatureC: untyped(system),
-    correctionRule: 'halving',
+    correctionRule: earlier.insulation?.correctionRule ?? 'halving',
     tenMinuteResistanceOhm: untyped(system),
   };
 }
+
+/** Ten minutes are waited for where the index says something; a figure that was typed is never hidden. */
+export const asksTenMinutes = ({ windingKind, tenMinuteResistanceOhm }: Pick<InsulationValues, 'windingKind' | 'tenMinuteResistanceOhm'>): boolean =>
+  windingKind !== 'random-wound' || tenMinuteResistanceOhm.text.trim() !== '';
 
 export const insulationFrom = (r: InsulationReading, system: UnitSystem): InsulationValues => ({
   windingKind: r.windingKind,
@@ -60,7 +68,15 @@ export interface ResistanceValues {
   construction: WindingResistanceReading['construction'];
 }
 
-export const blankResistance = (system: UnitSystem): ResistanceValues => ({ resistancesOhm: three(() => untyped(system)), windingTemperatureC: untyped(system), construction: 'random-wound' });
+export const blankResistance = (system: UnitSystem, construction: ResistanceValues['construction'] = 'random-wound'): ResistanceValues => ({
+  resistancesOhm: three(() => untyped(system)),
+  windingTemperatureC: untyped(system),
+  construction,
+});
+
+/** The coils are as an earlier test of this job says, or else as usual for the rated volts. */
+export const startResistance = ({ nameplate }: JobSheet['machine'], system: UnitSystem, earlier: EarlierTests): ResistanceValues =>
+  blankResistance(system, earlier.windingResistance?.construction ?? ((earlier.insulation?.ratedVoltageV ?? nameplate.ratedVoltageV ?? 0) >= FORM_WOUND_FROM_V ? 'form-wound' : 'random-wound'));
 
 export const resistanceFrom = (r: WindingResistanceReading | null, system: UnitSystem): ResistanceValues =>
   r === null

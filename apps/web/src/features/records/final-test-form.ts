@@ -3,15 +3,16 @@ import type { UnitSystem } from '@libs/quantities';
 import { demandedFinalTestParts } from '@shared/machine-tests';
 import type { ReadingsOf } from '@shared/records';
 import { FormReader, readTyped, typedFrom, untyped, type Typed } from '../../lib/typed.js';
+import { earlierTests, fullTestHeld } from './earlier-tests.js';
 import {
   blankInsulation,
-  blankResistance,
   insulationFrom,
   metersFrom,
   namedMeters,
   readInsulation,
   readResistance,
   resistanceFrom,
+  startResistance,
   three,
   type InsulationValues,
   type Meters,
@@ -62,17 +63,18 @@ export function shaftHeightOf(frame: string): number | null {
 
 export const finalTestForm: RecordDefinition<'final-test', FinalValues> = {
   kind: 'final-test',
-  start: ({ job, system }) => {
+  start: ({ job, records, system }) => {
     const { nameplate } = job.machine;
+    const earlier = earlierTests(records, ['final-test', 'before-varnish-test', 'incoming-test']);
     const demanded = demandedFinalTestParts(nameplate.kind, job.route);
     const empty = () => untyped(system);
     return {
-      insulation: blankInsulation(job.machine, system),
+      insulation: blankInsulation(job.machine, system, earlier),
       done: Object.fromEntries(Object.entries(PART_OF).map(([part, name]) => [name, demanded.includes(part as keyof typeof PART_OF)])) as Record<OptionalPart, boolean>,
-      windingResistance: blankResistance(system),
+      windingResistance: startResistance(job.machine, system, earlier),
       highPotential: {
-        case: job.route === 'recondition' ? 'reconditioned' : 'new-winding',
-        ratedVoltageV: typedFrom(nameplate.ratedVoltageV, 'voltage', system),
+        case: job.route === 'recondition' ? 'reconditioned' : fullTestHeld(records) ? 'repeat' : 'new-winding',
+        ratedVoltageV: typedFrom(earlier.insulation?.ratedVoltageV ?? nameplate.ratedVoltageV, 'voltage', system),
         secondaryVoltsV: empty(),
         ratedPowerW: typedFrom(nameplate.ratedPowerW, 'rated-power', system),
         supply: 'ac',

@@ -44,6 +44,7 @@ export function problemsIn<K extends FormKind, V>(definition: RecordDefinition<K
   return [...filled.problems, ...asked, ...(definition.check?.(filled.readings, context) ?? [])].filter(({ path }) => !seen.has(path) && seen.add(path));
 }
 
-export type YesNo = 'yes' | 'no' | null;
-export const isYes = (answer: YesNo): boolean | null => (answer === null ? null : answer === 'yes');
+/** An answer that was given can be taken back: 'not-done' counts as no answer. */
+export type YesNo = 'yes' | 'no' | 'not-done' | null;
+export const isYes = (answer: YesNo): boolean | null => (answer === 'yes' ? true : answer === 'no' ? false : null);
 export const yesNo = (value: boolean | null): YesNo => (value === null ? null : value ? 'yes' : 'no');

@@ -1,20 +1,21 @@
 import { beforeVarnishProblems, incomingTestProblems } from '@libs/machine-tests';
 import type { ReadingsOf } from '@shared/records';
 import { FormReader, typedFrom, untyped, type Typed } from '../../lib/typed.js';
+import { earlierTests, type MachineTestKind } from './earlier-tests.js';
 import {
   blankInsulation,
-  blankResistance,
   insulationFrom,
   metersFrom,
   namedMeters,
   readInsulation,
   readResistance,
   resistanceFrom,
+  startResistance,
   type InsulationValues,
   type Meters,
   type ResistanceValues,
 } from './electrical-form.js';
-import { isYes, yesNo, type RecordDefinition, type YesNo } from './record-definition.js';
+import { isYes, yesNo, type RecordContext, type RecordDefinition, type YesNo } from './record-definition.js';
 
 type Incoming = ReadingsOf<'incoming-test'>;
 type BeforeVarnish = ReadingsOf<'before-varnish-test'>;
@@ -31,15 +32,20 @@ export interface IncomingValues {
   remark: string;
 }
 
-export const incomingTestForm: RecordDefinition<'incoming-test', IncomingValues> = {
-  kind: 'incoming-test',
-  start: ({ job, system }) => ({
-    insulation: blankInsulation(job.machine, system),
+function startIncoming({ job, records, system }: RecordContext, kinds: readonly MachineTestKind[]): IncomingValues {
+  const earlier = earlierTests(records, kinds);
+  return {
+    insulation: blankInsulation(job.machine, system, earlier),
     done: { windingResistance: true },
-    windingResistance: blankResistance(system),
+    windingResistance: startResistance(job.machine, system, earlier),
     instruments: metersFrom(INCOMING_METERS, {}),
     remark: '',
-  }),
+  };
+}
+
+export const incomingTestForm: RecordDefinition<'incoming-test', IncomingValues> = {
+  kind: 'incoming-test',
+  start: (context) => startIncoming(context, ['incoming-test']),
   from: (r, system) => ({
     insulation: insulationFrom(r.insulation, system),
     done: { windingResistance: r.windingResistance !== null },
@@ -69,7 +75,7 @@ export interface BeforeVarnishValues extends IncomingValues {
 export const beforeVarnishForm: RecordDefinition<'before-varnish-test', BeforeVarnishValues> = {
   kind: 'before-varnish-test',
   start: (context) => ({
-    ...incomingTestForm.start(context),
+    ...startIncoming(context, ['before-varnish-test', 'incoming-test']),
     instruments: metersFrom(BEFORE_VARNISH_METERS, {}),
     surgeDifferenceFraction: untyped(context.system),
     surgePeakV: untyped(context.system),

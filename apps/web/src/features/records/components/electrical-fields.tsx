@@ -1,34 +1,34 @@
-import { insulationMinimum, type MachineTestLimits, type TestJudgement } from '@libs/machine-tests';
+import { Button } from '@blueprintjs/core';
+import { insulationMinimum, type InsulationReading, type MachineTestLimits, type TestJudgement } from '@libs/machine-tests';
 import { formatUsual, formatQuantity, type Kind, type UnitSystem } from '@libs/quantities';
 import type { InstrumentView } from '@shared/instruments';
 import type { ReactNode } from 'react';
 import { useController, useFormContext } from 'react-hook-form';
 import { CheckField, ChoiceField, SelectField } from '../../../components/fields.js';
+import { Notice } from '../../../components/notice.js';
 import { Panel } from '../../../components/panel.js';
 import { QuantityField } from '../../../components/quantity-field.js';
 import { useUnits } from '../../../components/units.js';
-import { VerdictTag } from '../../../components/verdict-tag.js';
+import { typedFrom } from '../../../lib/typed.js';
 import type { RecordContext } from '../record-definition.js';
+import { bothRulesWords, testVoltsAsked } from '../insulation-words.js';
+import { asksTenMinutes } from '../electrical-form.js';
 import { t } from '../text.js';
 import type { IncomingValues } from '../winding-test-forms.js';
+import { JudgementList } from './judgement-list.js';
 
 /** One test of a machine: its fields, the limit beside them, and what they come to as they are typed. */
 export function TestPanel({ title, limit, judgements, problem, children }: { readonly title: ReactNode; readonly limit?: string; readonly judgements: readonly TestJudgement[]; readonly problem?: string | undefined; readonly children: ReactNode }) {
   return (
     <Panel title={title} actions={limit && <span className="muted num">{limit}</span>}>
-      {children}
       {problem && (
-        <p className="lb-problem" role="alert">
+        <Notice intent="danger" role="alert" className="lb-refused">
           {problem}
-        </p>
+        </Notice>
       )}
+      {children}
       <div aria-live="polite">
-        {judgements.map((j) => (
-          <p key={j.test} className="lb-judged">
-            <VerdictTag verdict={j.verdict} />
-            <span>{j.words}</span>
-          </p>
-        ))}
+        <JudgementList judgements={judgements} />
       </div>
     </Panel>
   );
@@ -47,13 +47,25 @@ export function OptionalPanel({ name, title, demanded, limit, judgements, proble
   );
 }
 
-export function InsulationPanel({ context, judgements, reading }: { readonly context: RecordContext; readonly judgements: readonly TestJudgement[]; readonly reading: { readonly windingKind: IncomingValues['insulation']['windingKind']; readonly ratedVoltageV: number } }) {
-  const { control } = useFormContext<IncomingValues>();
+interface InsulationPanelProps {
+  readonly context: RecordContext;
+  readonly judgements: readonly TestJudgement[];
+  readonly reading: InsulationReading;
+  /** said at the head of the panel, before anything is typed */
+  readonly note?: string;
+}
+
+/** Insulation resistance after one minute, and what it comes to at 40 °C by either rule. */
+export function InsulationPanel({ context, judgements, reading, note }: InsulationPanelProps) {
+  const { control, watch } = useFormContext<IncomingValues>();
   const system = useUnits();
   const least = reading.ratedVoltageV > 0 ? insulationMinimum(reading, context.limits.machine).value : null;
+  const volts = testVoltsAsked(reading.ratedVoltageV, system);
+  const bothRules = bothRulesWords(reading, system);
   return (
     <TestPanel title={t('insulation')} {...(least === null ? {} : { limit: t('least', { least: formatQuantity(least, 'resistance-mega', system, { significant: 3 }) }) })} judgements={judgements}>
       <div className="stack">
+        {note && <Notice compact>{note}</Notice>}
         <ChoiceField
           control={control}
           name="insulation.windingKind"
@@ -67,15 +79,17 @@ export function InsulationPanel({ context, judgements, reading }: { readonly con
         />
         <div className="fields lb-record-three">
           <QuantityField control={control} name="insulation.ratedVoltageV" kind="voltage" label={t('ratedVoltage')} usual={[12, 15_000]} />
-          <QuantityField control={control} name="insulation.testVoltsV" kind="voltage" label={t('testVolts')} usual={[100, 10_000]} />
+          <QuantityField control={control} name="insulation.testVoltsV" kind="voltage" label={t('testVolts')} usual={[100, 10_000]} help={volts?.words} />
           <QuantityField control={control} name="insulation.windingTemperatureC" kind="temperature" label={t('windingTemperature')} usual={[5, 60]} />
           <QuantityField control={control} name="insulation.resistanceOhm" kind="resistance-mega" label={t('afterOneMinute')} />
-          <QuantityField control={control} name="insulation.tenMinuteResistanceOhm" kind="resistance-mega" label={t('tenMinutes')} optional />
+          {asksTenMinutes(watch('insulation')) && <QuantityField control={control} name="insulation.tenMinuteResistanceOhm" kind="resistance-mega" label={t('tenMinutes')} optional />}
         </div>
+        {volts && reading.testVoltsV !== volts.leastV && <TakeVolts name="insulation.testVoltsV" voltsV={volts.leastV} />}
         <ChoiceField
           control={control}
           name="insulation.correctionRule"
           label={t('correctionRule')}
+          help={[bothRules, t('rulesDiffer')].filter(Boolean).join(' ')}
           options={[
             { value: 'halving', label: t('halving') },
             { value: 'thermosetting', label: t('thermosetting') },
@@ -83,6 +97,20 @@ export function InsulationPanel({ context, judgements, reading }: { readonly con
         />
       </div>
     </TestPanel>
+  );
+}
+
+/** Fills in the volts that are asked, on a tap. */
+export function TakeVolts({ name, voltsV }: { readonly name: string; readonly voltsV: number }) {
+  const { setValue } = useFormContext();
+  const system = useUnits();
+  return (
+    <div>
+      <Button
+        text={t('takeLevel', { volts: formatUsual(voltsV, 'voltage', system) })}
+        onClick={() => setValue(name, typedFrom(voltsV, 'voltage', system), { shouldDirty: true, shouldTouch: true, shouldValidate: true })}
+      />
+    </div>
   );
 }
 
@@ -167,23 +195,25 @@ function meterWords(i: InstrumentView): string {
   return t('meterOption', { tag: i.tag, description: i.description });
 }
 
+interface YesNoProps {
+  readonly name: string;
+  readonly label: string;
+  readonly help?: string;
+  /** an answer can be put back to not done */
+  readonly mayBeLeft?: boolean;
+}
+
 /** A yes or a no, or not tested. */
-export function YesNoField({ name, label, help, problem }: { readonly name: string; readonly label: string; readonly help?: string; readonly problem?: string | undefined }) {
+export function YesNoField({ name, label, help, mayBeLeft = false }: YesNoProps) {
   const { control } = useFormContext();
   return (
-    <>
-      <ChoiceField
-        control={control}
-        name={name}
-        label={label}
-        help={help}
-        options={[
-          { value: 'yes', label: t('yes') },
-          { value: 'no', label: t('no') },
-        ]}
-      />
-      {problem && <p className="lb-problem">{problem}</p>}
-    </>
+    <ChoiceField
+      control={control}
+      name={name}
+      label={label}
+      help={help}
+      options={[{ value: 'yes', label: t('yes') }, { value: 'no', label: t('no') }, ...(mayBeLeft ? [{ value: 'not-done', label: t('answerNotDone') }] : [])]}
+    />
   );
 }
 

@@ -1,18 +1,19 @@
 import { Button } from '@blueprintjs/core';
-import { finalTestProblems, vibrationLimit } from '@libs/machine-tests';
+import { finalTestProblems, vibrationLimit, type FinalTestDerived } from '@libs/machine-tests';
 import { formatUsual, OutOfRangeError } from '@libs/quantities';
 import { demandedFinalTestParts } from '@shared/machine-tests';
 import { useFieldArray, useFormContext, useWatch } from 'react-hook-form';
 import { ChoiceField, SelectField, TextField } from '../../../components/fields.js';
 import { QuantityField } from '../../../components/quantity-field.js';
 import { useUnits } from '../../../components/units.js';
-import { typedFrom, untyped } from '../../../lib/typed.js';
+import { untyped } from '../../../lib/typed.js';
 import { asksSecondaryVolts, blankPoint, FINAL_METERS, finalReadings, levelNow, type FinalValues } from '../final-test-form.js';
 import { judgementsOf, runningFinal, type RunningTest } from '../live-machine-test.js';
 import { isYes, type RecordContext } from '../record-definition.js';
 import { t } from '../text.js';
 import { CoreOnceMore } from './core-once-more.js';
-import { InsulationPanel, MetersPanel, OptionalPanel, percentWords, ResistancePanel, TestPanel, YesNoField } from './electrical-fields.js';
+import { InsulationPanel, MetersPanel, OptionalPanel, percentWords, ResistancePanel, TakeVolts, TestPanel, YesNoField } from './electrical-fields.js';
+import { NoLoadLosses } from './no-load-losses.js';
 import type { FieldsProps } from './record-form.js';
 import { RunningVerdict } from './running-verdict.js';
 
@@ -20,7 +21,7 @@ type Readings = FieldsProps<'final-test'>['readings'];
 interface PanelProps {
   readonly context: RecordContext;
   readonly readings: Readings;
-  readonly running: RunningTest<unknown> | null;
+  readonly running: RunningTest<FinalTestDerived> | null;
   readonly demanded: boolean;
 }
 
@@ -46,9 +47,9 @@ export function FinalTestFields({ context, readings }: FieldsProps<'final-test'>
         <VibrationPanel {...panel('vibration')} />
         <BearingsPanel {...panel('bearings')} />
         <TestPanel title={t('direction')} judgements={judgementsOf(running, 'direction')}>
-          <YesNoField name="directionRight" label={t('direction')} {...(demands.includes('direction') ? { help: t('demanded') } : {})} />
+          <YesNoField name="directionRight" label={t('direction')} mayBeLeft {...(demands.includes('direction') ? { help: t('demanded') } : {})} />
         </TestPanel>
-        <CoreOnceMore records={context.records} />
+        <CoreOnceMore job={context.job} records={context.records} />
         <MetersPanel context={context} names={FINAL_METERS} />
       </div>
       <TextField control={control} name="remark" label={t('remark')} optional />
@@ -57,7 +58,7 @@ export function FinalTestFields({ context, readings }: FieldsProps<'final-test'>
 }
 
 function HighPotentialPanel({ context, readings, running, demanded }: PanelProps) {
-  const { control, setValue } = useFormContext<FinalValues>();
+  const { control } = useFormContext<FinalValues>();
   const system = useUnits();
   const level = levelNow(readings, context.limits.machine);
   const refused = finalTestProblems(finalReadings(readings), context.limits.machine).find((p) => p.path === 'highPotential');
@@ -66,6 +67,7 @@ function HighPotentialPanel({ context, readings, running, demanded }: PanelProps
   return (
     <OptionalPanel name="highPotential" title={t('highPotential')} demanded={demanded} judgements={judgementsOf(running, 'highPotential')} problem={refused?.message} {...(level && volts ? { limit: t('level', { volts, words: level.words }) } : {})}>
       <div className="stack">
+        <p className="lb-panel-caution">{t('highPotentialCaution')}</p>
         <SelectField
           control={control}
           name="highPotential.case"
@@ -86,8 +88,11 @@ function HighPotentialPanel({ context, readings, running, demanded }: PanelProps
           <QuantityField control={control} name="highPotential.appliedVoltsV" kind="voltage" label={t('appliedVolts')} usual={[500, 60_000]} />
           <QuantityField control={control} name="highPotential.seconds" kind="number" label={t('seconds')} usual={[1, 120]} />
         </div>
-        {level && volts && !refused && (
-          <Button text={t('takeLevel', { volts })} onClick={() => setValue('highPotential.appliedVoltsV', typedFrom(level.voltsV, 'voltage', system), { shouldDirty: true, shouldTouch: true, shouldValidate: true })} />
+        {level && (
+          <div className="row">
+            {!refused && <TakeVolts name="highPotential.appliedVoltsV" voltsV={level.voltsV} />}
+            <span className="muted lb-source">{t('levelSource', level)}</span>
+          </div>
         )}
         <ChoiceField
           control={control}
@@ -132,6 +137,8 @@ function NoLoadPanel({ context, running, demanded }: PanelProps) {
           <QuantityField control={control} name="noLoad.speedRpm" kind="speed" label={t('speed')} optional />
           <QuantityField control={control} name="noLoad.ratedVoltageV" kind="voltage" label={t('ratedFed')} optional />
         </div>
+        <p className="muted lb-source">{t('pointsHelp')}</p>
+        <NoLoadLosses derived={running?.derived.noLoad ?? null} />
       </div>
     </OptionalPanel>
   );

@@ -3,9 +3,10 @@ import { TextField } from '../../../components/fields.js';
 import { QuantityField } from '../../../components/quantity-field.js';
 import { useUnits } from '../../../components/units.js';
 import { judgementsOf, runningBeforeVarnish, runningIncoming } from '../live-machine-test.js';
+import { usualSurgePeakV } from '../insulation-words.js';
 import { t } from '../text.js';
 import { BEFORE_VARNISH_METERS, INCOMING_METERS, type BeforeVarnishValues } from '../winding-test-forms.js';
-import { InsulationPanel, MetersPanel, percentWords, ResistancePanel, TestPanel, YesNoField } from './electrical-fields.js';
+import { InsulationPanel, MetersPanel, percentWords, ResistancePanel, TakeVolts, TestPanel, YesNoField } from './electrical-fields.js';
 import type { FieldsProps } from './record-form.js';
 import { RunningVerdict } from './running-verdict.js';
 
@@ -17,7 +18,7 @@ export function IncomingTestFields({ context, readings }: FieldsProps<'incoming-
     <>
       <RunningVerdict running={running} />
       <div className="lb-tests">
-        <InsulationPanel context={context} reading={readings.insulation} judgements={judgementsOf(running, 'insulation')} />
+        <InsulationPanel context={context} reading={readings.insulation} judgements={judgementsOf(running, 'insulation')} note={t('neverAsFound')} />
         <ResistancePanel context={context} judgements={judgementsOf(running, 'windingResistance')} demanded={false} />
         <MetersPanel context={context} names={INCOMING_METERS} />
       </div>
@@ -31,6 +32,7 @@ export function BeforeVarnishFields({ context, readings }: FieldsProps<'before-v
   const { control } = useFormContext<BeforeVarnishValues>();
   const system = useUnits();
   const running = runningBeforeVarnish(readings, context);
+  const peakV = usualSurgePeakV(readings.insulation);
   return (
     <>
       <RunningVerdict running={running} />
@@ -40,11 +42,12 @@ export function BeforeVarnishFields({ context, readings }: FieldsProps<'before-v
         <TestPanel title={t('surge')} limit={t('surgeLimit', { limit: percentWords(context.limits.machine.surgeDifference.value, system) })} judgements={judgementsOf(running, 'surge')}>
           <div className="fields">
             <QuantityField control={control} name="surgeDifferenceFraction" kind="percent" label={t('surgeDifference')} usual={[0, 0.3]} />
-            <QuantityField control={control} name="surgePeakV" kind="voltage" label={t('surgePeak')} optional />
+            <QuantityField control={control} name="surgePeakV" kind="voltage" label={t('surgePeak')} {...(peakV === null ? {} : { help: t('surgePeakHelp') })} optional />
           </div>
+          {peakV !== null && <TakeVolts name="surgePeakV" voltsV={peakV} />}
         </TestPanel>
         <TestPanel title={t('polarity-test')} judgements={judgementsOf(running, 'polarity')}>
-          <YesNoField name="polarityRight" label={t('polarity')} help={t('polarityHelp')} />
+          <YesNoField name="polarityRight" label={t('polarity')} help={t('polarityHelp')} mayBeLeft />
         </TestPanel>
         <MetersPanel context={context} names={BEFORE_VARNISH_METERS} />
       </div>

@@ -200,10 +200,107 @@ describe('the final test on screen', () => {
     expect(screen.queryByRole('button', { name: /^Take/ })).toBeNull();
   });
 
+  it('says where the high-potential level comes from, and what to be careful of', () => {
+    open('final-test');
+    const panel = within(screen.getByRole('heading', { name: 'High potential' }).closest('section')!);
+    expect(panel.getByText(/^From .*MG 1/)).toBeDefined();
+    expect(panel.getByText(/Barrier up/)).toBeDefined();
+  });
+
+  it('shows of each judgement its limit and where that comes from', () => {
+    open('final-test');
+    type('insulation.windingTemperatureC', '24');
+    type('insulation.resistanceOhm', '2400');
+    const panel = within(screen.getByRole('heading', { name: 'Insulation resistance' }).closest('section')!);
+    expect(panel.getByText('Limits and where they come from')).toBeDefined();
+    expect(panel.getAllByText(/^at least 5\.00 MΩ: IEEE 43/).length).toBeGreaterThan(0);
+    expect(panel.getByText(/792 MΩ by halving, .* by the thermosetting rule/)).toBeDefined();
+  });
+
+  it('refuses high potential at the head of its panel', () => {
+    open('final-test');
+    type('insulation.windingTemperatureC', '40');
+    type('insulation.resistanceOhm', '2');
+    const panel = screen.getByRole('heading', { name: 'High potential' }).closest('section')!;
+    const refusal = within(panel).getByText(/no high-potential test/);
+    expect(refusal.compareDocumentPosition(within(panel).getByText('Rated volts')) & Node.DOCUMENT_POSITION_FOLLOWING).toBeTruthy();
+  });
+
+  it('tells winding loss from the rest, and friction from core with three low points', () => {
+    open('final-test');
+    type('insulation.windingTemperatureC', '24');
+    type('insulation.resistanceOhm', '2400');
+    const points = [[400, 11, 618.9], [240, 5.6, 327], [200, 4.7, 282.4], [160, 3.9, 246.5]] as const; // IEEE 112-2004 clause 5.5
+    points.forEach(([volts, amps, watts], i) => {
+      if (i > 0) fireEvent.click(screen.getByRole('button', { name: 'Another point at other volts' }));
+      for (const j of [0, 1, 2]) {
+        type(`noLoad.points.${i}.voltsV.${j}`, String(volts));
+        type(`noLoad.points.${i}.ampsA.${j}`, String(amps));
+      }
+      type(`noLoad.points.${i}.wattsW`, String(watts));
+    });
+    type('noLoad.lineResistanceOhm', '0.6');
+    type('noLoad.frequencyHz', '50');
+    const panel = within(screen.getByRole('heading', { name: 'No-load run' }).closest('section')!);
+    const figure = (name: RegExp) => panel.getByText(name).parentElement!.querySelector('dd')!.textContent;
+    expect(figure(/^In the winding/)).toContain('108.9'); // 1.5 × 0.6 × 11²
+    expect(figure(/^Rest/)).toContain('510.0'); // 618.9 − 108.9
+    expect(parseFloat(figure(/^Friction and windage, from 3 low points/)!)).toBeCloseTo(180, 0);
+    expect(parseFloat(figure(/^Core$/)!)).toBeCloseTo(330, 0);
+  });
+
+  it('lets an answer be put back to not done', () => {
+    open('final-test');
+    const direction = within(screen.getByRole('radiogroup', { name: 'Direction of rotation is right' }));
+    type('insulation.windingTemperatureC', '24');
+    type('insulation.resistanceOhm', '2400');
+    const running = within(screen.getByRole('region', { name: 'So far' }));
+    fireEvent.click(direction.getByRole('radio', { name: 'yes' }));
+    expect(running.getByText(/still to be done/).textContent).not.toContain('direction');
+    fireEvent.click(direction.getByRole('radio', { name: 'not done' }));
+    expect(running.getByText(/still to be done/).textContent).toContain('direction');
+  });
+
+  it('asks for ten minutes only where the index says something', () => {
+    open('final-test');
+    expect(field('insulation.tenMinuteResistanceOhm')).toBeNull();
+    fireEvent.click(within(screen.getByRole('radiogroup', { name: 'Winding' })).getByRole('radio', { name: 'form-wound' }));
+    expect(field('insulation.tenMinuteResistanceOhm')).not.toBeNull();
+  });
+
+  it('echoes milliohms with digits enough to tell two windings apart', () => {
+    open('final-test');
+    type('windingResistance.resistancesOhm.0', '13.31 mΩ');
+    type('windingResistance.resistancesOhm.1', '0.01328');
+    expect(screen.getByText('read as 13.310 mΩ')).toBeDefined();
+    expect(screen.getByText('read as 13.280 mΩ')).toBeDefined();
+  });
+
   it('shows the core once more as its last test found it', () => {
     open('final-test', [keptTest('core-test-before', sampleBefore(12), undefined, 'rec-0001')]);
     expect(screen.getByText(/Core test of/)).toBeDefined();
     expect(screen.getByText('3.12')).toBeDefined();
+  });
+});
+
+describe('the tests before it on screen', () => {
+  it('an incoming test says that a winding as found is never high-potential tested', () => {
+    open('incoming-test');
+    expect(within(screen.getByRole('heading', { name: 'Insulation resistance' }).closest('section')!).getByText(/never high-potential tested/)).toBeDefined();
+  });
+
+  it('a surge test offers its usual peak, and takes it on a tap', () => {
+    open('before-varnish-test');
+    fireEvent.click(screen.getByRole('button', { name: 'Take 1800.0 V' })); // 2 × 400 + 1000
+    expect(field('surgePeakV').value).toBe('1800');
+  });
+
+  it('test volts other than those asked are one tap from right', () => {
+    open('incoming-test');
+    expect(screen.queryByRole('button', { name: /^Take/ })).toBeNull();
+    type('insulation.testVoltsV', '1000');
+    fireEvent.click(screen.getByRole('button', { name: 'Take 500.0 V' }));
+    expect(field('insulation.testVoltsV').value).toBe('500');
   });
 });
 
