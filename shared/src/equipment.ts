@@ -21,7 +21,7 @@ const supplySchema = z
     maxAmpsA: between(0.1, 5000, 'Between 0.1 and 5000 A.'),
     frequencyHz: between(10, 400, 'Between 10 and 400 Hz.'),
     /** each tap in volts, the lowest first; only of a supply with taps */
-    tapsV: z.array(between(1, 1000, 'Between 1 and 1000 V.')).min(1, 'At least one tap.').max(60, 'At most 60 taps.').optional(),
+    tapsV: z.array(between(1, 1000, 'Between 1 and 1000 V.')).max(60, 'At most 60 taps.').optional(),
   })
   .superRefine((s, context) => {
     const say = (path: string, message: string) => context.addIssue({ code: 'custom', path: [path], message });
@@ -30,7 +30,7 @@ const supplySchema = z
       if (s.minVoltsV >= s.maxVoltsV) say('minVoltsV', 'Below the highest voltage.');
       return;
     }
-    if (!s.tapsV) return say('tapsV', 'List the taps, in volts.');
+    if (!s.tapsV || s.tapsV.length === 0) return say('tapsV', 'List the taps, in volts.');
     if (s.tapsV.some((v, i) => i > 0 && v <= s.tapsV![i - 1]!)) return say('tapsV', 'Each tap once, the lowest first.');
     if (s.minVoltsV !== s.tapsV[0]) say('minVoltsV', 'The lowest tap.');
     if (s.maxVoltsV !== s.tapsV.at(-1)) say('maxVoltsV', 'The highest tap.');
