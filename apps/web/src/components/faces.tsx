@@ -1,9 +1,11 @@
 import { Button, Spinner } from '@blueprintjs/core';
 import type { UseQueryResult } from '@tanstack/react-query';
 import type { ReactNode } from 'react';
+import { Link } from 'react-router-dom';
 import { ApiError } from '../lib/http.js';
 import { defineText } from '../lib/text.js';
 import { Notice } from './notice.js';
+import { PageHeader } from './panel.js';
 import './faces.css';
 
 const t = defineText({
@@ -11,6 +13,9 @@ const t = defineText({
   failed: 'This could not be loaded',
   again: 'Try again',
   number: 'Request number {id}',
+  notFound: 'There is nothing at this address',
+  notFoundWords: 'The link may be old, or belong to somebody else. Go back to the start and look from there.',
+  home: 'To the start',
 });
 
 export function Waiting({ words = t('waiting') }: { readonly words?: string }) {
@@ -42,6 +47,18 @@ export function Empty({ title, children }: { readonly title: string; readonly ch
   );
 }
 
+/** An address behind which there is nothing for this person; trying again would not help. */
+export function NothingHere() {
+  return (
+    <>
+      <PageHeader title={t('notFound')} />
+      <Empty title={t('notFoundWords')}>
+        <Link to="/">{t('home')}</Link>
+      </Empty>
+    </>
+  );
+}
+
 interface AnswerProps<T> {
   readonly query: UseQueryResult<T>;
   readonly children: (data: T) => ReactNode;
@@ -51,6 +68,7 @@ interface AnswerProps<T> {
 
 /** The four faces of a question to the server: waiting, failed, empty, filled. */
 export function Answer<T>({ query, children, isEmpty, empty }: AnswerProps<T>) {
+  if (query.data === undefined && query.error instanceof ApiError && query.error.status === 404) return <NothingHere />;
   if (query.data === undefined && query.error) return <Failed error={query.error} onAgain={() => void query.refetch()} />;
   if (query.data === undefined) return <Waiting />;
   if (isEmpty?.(query.data) && empty !== undefined) return empty;

@@ -1,6 +1,6 @@
 import { Button } from '@blueprintjs/core';
 import { isRouteErrorResponse, Link, useRouteError } from 'react-router-dom';
-import { Empty } from '../../components/faces.js';
+import { Empty, NothingHere } from '../../components/faces.js';
 import { PageHeader } from '../../components/panel.js';
 import { ApiError } from '../../lib/http.js';
 import { t } from '../shell/text.js';
@@ -12,7 +12,7 @@ export function ErrorPage() {
   const error = useRouteError();
   const status = statusOf(error);
   if (status === 404) return <NotFoundPage />;
-  if (status === 403) return <Dead title={t('forbidden')} words={t('forbiddenWords')} />;
+  if (status === 403) return <ForbiddenPage />;
   return (
     <>
       <PageHeader title={t('failed')} />
@@ -25,14 +25,14 @@ export function ErrorPage() {
 }
 
 export function NotFoundPage() {
-  return <Dead title={t('notFound')} words={t('notFoundWords')} />;
+  return <NothingHere />;
 }
 
-function Dead({ title, words }: { readonly title: string; readonly words: string }) {
+export function ForbiddenPage() {
   return (
     <>
-      <PageHeader title={title} />
-      <Empty title={words}>
+      <PageHeader title={t('forbidden')} />
+      <Empty title={t('forbiddenWords')}>
         <Link to="/">{t('home')}</Link>
       </Empty>
     </>

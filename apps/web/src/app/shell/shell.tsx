@@ -5,7 +5,8 @@ import { UnitsProvider } from '../../components/units.js';
 import { useMe } from '../../lib/me.js';
 import { AccountMenu } from './account-menu.js';
 import { ConnectionBanner } from './connection-banner.js';
-import { homeOf, roomsOf } from './rooms.js';
+import { ForbiddenPage } from '../routes/error-page.js';
+import { homeOf, isOpenTo, roomsOf } from './rooms.js';
 import { isTyping } from './scanner.js';
 import { SearchBox } from './search-box.js';
 import { SignInAgain } from './sign-in-again.js';
@@ -33,6 +34,7 @@ export function Shell() {
   const customer = me.roles.includes('customer');
   useTheme(me.preferences.theme);
   const content = useFocusOnNewPage();
+  const { pathname } = useLocation();
   return (
     <UnitsProvider value={me.preferences.units}>
       <div className={`lb-shell${customer ? ' lb-shell-portal' : ''}`}>
@@ -58,7 +60,7 @@ export function Shell() {
         </header>
         <ConnectionBanner />
         <main id="content" tabIndex={-1} ref={content}>
-          <Outlet />
+          {isOpenTo(me, pathname) ? <Outlet /> : <ForbiddenPage />}
         </main>
         <SignInAgain />
         <ScrollRestoration />

@@ -37,8 +37,6 @@ export const t = defineText({
   signIn: 'Sign in',
   signInTitle: 'Sign in',
   signInWords: 'The job book and test record of the rewind shop.',
-  notFound: 'There is nothing at this address',
-  notFoundWords: 'The link may be old. Find what you look for with the search box, or go back to the start.',
   failed: 'This page stumbled',
   failedWords: 'Nothing was lost. Load it again; if it stays, tell the shop what you were doing.',
   reload: 'Load again',
