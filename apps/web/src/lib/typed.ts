@@ -7,9 +7,17 @@ export interface Typed {
   readonly system: UnitSystem;
 }
 export const untyped = (system: UnitSystem = 'si'): Typed => ({ text: '', system });
-/** A figure that is already known, written so that it reads back as itself. */
-export const typedFrom = (si: number | null | undefined, kind: Kind, system: UnitSystem = 'si'): Typed =>
-  si === null || si === undefined ? untyped(system) : { text: formatQuantity(si, kind, system, { unit: false }), system };
+/** Longer than this, a figure was not read off a meter but comes from changing its units. */
+const MOST_CHARACTERS = 8;
+
+/** A figure that is already known, written so that it reads back as itself: in the units it is round in, when the wished ones make it endless. */
+export function typedFrom(si: number | null | undefined, kind: Kind, system: UnitSystem = 'si'): Typed {
+  if (si === null || si === undefined) return untyped(system);
+  const wished = formatQuantity(si, kind, system, { unit: false });
+  if (system === 'si' || wished.length <= MOST_CHARACTERS) return { text: wished, system };
+  const inSi = formatQuantity(si, kind, 'si', { unit: false });
+  return inSi.length < wished.length ? { text: inSi, system: 'si' } : { text: wished, system };
+}
 
 export type Reading = { readonly state: 'empty' } | { readonly state: 'read'; readonly si: number; readonly unit: string } | { readonly state: 'wrong'; readonly words: string };
 
@@ -19,11 +27,14 @@ export function readTyped(typed: Typed | undefined, kind: Kind): Reading {
   return parsed.ok ? { state: 'read', si: parsed.si, unit: parsed.unit } : { state: 'wrong', words: parsed.words };
 }
 
-/** What the field shows: the person's own text, or the same figure in the other units. */
+/** What the field shows: the person's own text, or the same figure in the other units, as far as it fits. What counts is the text. */
 export function shownText(typed: Typed, kind: Kind, system: UnitSystem): string {
   if (typed.system === system) return typed.text;
   const reading = readTyped(typed, kind);
-  return reading.state === 'read' ? formatQuantity(reading.si, kind, system, { unit: false }) : typed.text;
+  if (reading.state !== 'read') return typed.text;
+  const full = formatQuantity(reading.si, kind, system, { unit: false });
+  if (full.length <= MOST_CHARACTERS || !full.includes('.')) return full;
+  return formatQuantity(reading.si, kind, system, { unit: false, significant: 6 }).replace(/(\.\d*?)0+$/, '$1').replace(/\.$/, '');
 }
 
 export interface FormProblem {
