@@ -4,6 +4,7 @@ import type { FastifyReply } from 'fastify';
 import type { ActorRequest } from '../auth/needs.js';
 import { AppError } from './app-error.js';
 import { HTTP_STATUS } from './error-status.js';
+import { isOpenedByAPerson, plainPage } from './plain-page.js';
 import { InputNotValid } from './schema.pipe.js';
 
 const BY_STATUS: Record<number, ErrorCode> = { 400: 'INPUT_NOT_VALID', 401: 'NOT_SIGNED_IN', 403: 'FORBIDDEN', 404: 'NOT_FOUND', 413: 'FILE_TOO_LARGE', 415: 'NOT_MULTIPART', 429: 'TOO_MANY_TRIES' };
@@ -41,6 +42,10 @@ export class ErrorFilter implements ExceptionFilter {
     if (answer.code === 'INTERNAL') this.log.error(exception instanceof Error ? exception : new Error(String(exception)));
     if (WATCHED.has(answer.code)) this.log.warn(`${answer.code} ${request.method} ${request.url.split('?')[0]} from ${request.ip}, user ${request.user?.userId ?? 'none'}`);
     const { status, ...rest } = answer;
+    if (isOpenedByAPerson(request)) {
+      void reply.status(status).header('content-type', 'text/html; charset=utf-8').header('cache-control', 'no-store').send(plainPage(answer.message, request.id));
+      return;
+    }
     const body = { statusCode: status, ...rest, requestId: request.id } as ErrorBody;
     void reply.status(status).header('content-type', 'application/json; charset=utf-8').header('cache-control', 'no-store').send(body);
   }
