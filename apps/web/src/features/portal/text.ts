@@ -20,10 +20,11 @@ export const t = defineText({
   noJobs: 'No machine of yours is with us',
   noJobsWords: 'Machines you bring or send to us show up here with what happens to them.',
   promised: 'promised for {day}',
+  promisedFor: 'Promised for {day}.',
   arrived: 'arrived {day}',
 
   // one job
-  jobBelow: 'job {number}, arrived {day}',
+  jobBelow: 'Job {number}, arrived {day}',
   now: 'What happens now',
   way: 'The way through the shop',
   wayNow: '{step} (now)',

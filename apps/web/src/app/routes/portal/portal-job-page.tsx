@@ -22,7 +22,7 @@ export function PortalJobPage() {
           <Panel title={t('now')}>
             <div className="stack">
               <p className="lb-portal-now">{happensNow(data, data.quotes.map((q) => q.state))}</p>
-              {data.promisedOn && (data.state === 'open' || data.state === 'on-hold') && <p className="muted">{t('promised', { day: calendarDay(data.promisedOn) })}</p>}
+              {data.promisedOn && (data.state === 'open' || data.state === 'on-hold') && <p className="muted">{t('promisedFor', { day: calendarDay(data.promisedOn) })}</p>}
             </div>
           </Panel>
           <JobMoneyList job={data} />

@@ -40,11 +40,15 @@ export function UploadBox({ jobId }: { readonly jobId: string }) {
         <input ref={files} type="file" multiple accept={ACCEPT} hidden aria-label={t('choose')} onChange={onPick} />
         <input ref={camera} type="file" accept="image/*" capture="environment" hidden aria-label={t('camera')} onChange={onPick} />
       </div>
-      <ul className="lb-uploads" role="status">
-        {uploads.map((upload) => (
-          <UploadLine key={upload.key} upload={upload} onRetry={() => retry(upload)} onDismiss={() => dismiss(upload.key)} />
-        ))}
-      </ul>
+      <div role="status">
+        {uploads.length > 0 && (
+          <ul className="lb-uploads">
+            {uploads.map((upload) => (
+              <UploadLine key={upload.key} upload={upload} onRetry={() => retry(upload)} onDismiss={() => dismiss(upload.key)} />
+            ))}
+          </ul>
+        )}
+      </div>
     </div>
   );
 }
