@@ -56,8 +56,8 @@ function toPart({ burnout, dismantling, loads, ...row }: Row): Part {
 }
 
 function limitOf(dismantling: ReadingsOf<'dismantling'>, limits: BurnoutLimits): PartLimit {
-  const { limitC, reason } = partLimit(dismantling, limits);
-  const limitReason: PartLimitReason = reason === 'aluminium frame' ? 'aluminium' : dismantling.corePlate;
+  const { limitC } = partLimit(dismantling, limits);
+  const limitReason: PartLimitReason = dismantling.frameMaterial === 'aluminium' && limitC === limits.aluminiumFrameC ? 'aluminium' : dismantling.corePlate;
   return { limitC, limitReason, limitSource: limits.source, limitStanding: limits.standing };
 }
 

@@ -96,7 +96,7 @@ export const t = defineText({
   ownLimit: 'its own limit {limit}',
   marked: 'in a load that went over',
   limitChanged: 'Its dismantling or its limits were changed since. Correct the load to judge it anew.',
-  source: '{source} ({standing})',
+  limitFrom: 'Limit {limit}: {reason}. {source} ({standing}).',
 
   curve: 'The curve',
   figures: 'Figures of the thermocouples',

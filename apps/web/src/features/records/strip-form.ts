@@ -1,4 +1,6 @@
 import { burnoutProblems, partLimit, type PartLimit } from '@shared/burnout-limit';
+import type { JobLoad } from '@shared/burnouts';
+import type { UnitSystem } from '@libs/quantities';
 import type { BurnoutLimits } from '@shared/limits';
 import type { ReadingsOf } from '@shared/records';
 import { lastOfKind, readingsOf } from '../../lib/job-records.js';
@@ -64,4 +66,15 @@ export function stripLimit(context: RecordContext): PartLimit & { limits: Burnou
   const limits = context.limits.burnout;
   const dismantling = dismantlingIn(context);
   return { ...partLimit(dismantling, limits), limits, dismantled: dismantling !== undefined };
+}
+
+/** What a load says of this record; where the sensor sat is left as it was typed. */
+export function takenFromLoad(load: Pick<JobLoad, 'ovenId' | 'peakC' | 'minutesAbove345C' | 'hottest'>, typed: Pick<StripValues, 'sensorPosition'>, system: UnitSystem): Partial<StripValues> {
+  return {
+    method: 'oven-burnout',
+    ovenId: load.ovenId,
+    partPeakC: typedFrom(load.peakC === null ? null : Math.round(load.peakC * 10) / 10, 'temperature', system),
+    minutesAbove345C: typedFrom(load.minutesAbove345C === null ? null : Math.round(load.minutesAbove345C), 'duration', system),
+    ...(typed.sensorPosition === '' && load.hottest ? { sensorPosition: load.hottest } : {}),
+  };
 }

@@ -46,9 +46,7 @@ function Load({ load }: { readonly load: LoadView }) {
           {load.file ? (
             <>
               <Panel title={t('curve')}>
-                <div className="lb-load-picture">
-                  <LoadCurve load={load} />
-                </div>
+                <LoadCurve load={load} />
               </Panel>
               <Panel title={t('dropTitle')}>
                 <FileRead loadId={load.id} file={load.file} />

@@ -1,4 +1,5 @@
 import type { LoadChannel, LoggerFileView } from '@shared/burnouts';
+import '../../../components/data-table.css';
 import { Quantity } from '../../../components/quantity.js';
 import { useUnits } from '../../../components/units.js';
 import { sizeOf } from '../../../lib/format.js';

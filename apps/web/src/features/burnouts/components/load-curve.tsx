@@ -3,6 +3,7 @@ import type { LoadView } from '@shared/burnouts';
 import { Drawing } from '../../../components/drawing.js';
 import { limitReasonWords } from '../load-words.js';
 import { t } from '../text.js';
+import '../burnouts.css';
 
 /** The curve with its limit; of the thermocouples those on the parts, or all where none is. */
 export function LoadCurve({ load }: { readonly load: LoadView }) {
@@ -11,7 +12,9 @@ export function LoadCurve({ load }: { readonly load: LoadView }) {
   const parts = read.filter((c) => c.onPart);
   // the hottest is drawn strong and hatched: it must be one that is judged
   const shown = parts.length > 0 ? parts : read;
-  const drawing = burnoutCurveDrawing({
+  const drawn = (narrow: boolean) =>
+    burnoutCurveDrawing({
+      narrow,
     title: t('loadTitle', { number: load.number, oven: load.ovenName }),
     limit: { celsius: limitC, words: t('limitWords', { limit: `${limitC} °C`, reason: limitReasonWords(load.limitReason) }) },
     channels: shown.map((c) => {
@@ -19,5 +22,14 @@ export function LoadCurve({ load }: { readonly load: LoadView }) {
       return { name: c.name, peakC: c.peakC, points: c.curve.map(([minute, celsius]) => ({ minute, celsius })), gaps: c.gaps ?? [], aboveLimit: above ? { minutes: above.minutes, unknownMinutes: above.unknownMinutes } : null };
     }),
   });
-  return <Drawing drawing={drawing} withTable={t('figures')} />;
+  return (
+    <div className="lb-load-picture">
+      <div className="lb-load-wide">
+        <Drawing drawing={drawn(false)} withTable={t('figures')} />
+      </div>
+      <div className="lb-load-narrow">
+        <Drawing drawing={drawn(true)} withTable={t('figures')} />
+      </div>
+    </div>
+  );
 }

@@ -36,7 +36,7 @@ export function LoadVerdict({ load }: { readonly load: LoadView }) {
         ]}
       />
       <p className="muted lb-load-small">
-        {t('limitWords', { limit: celsiusWords(load.limitC, system), reason: limitReasonWords(load.limitReason) })}. {t('source', { source: load.limitSource, standing: load.limitStanding })}
+        {t('limitFrom', { limit: celsiusWords(load.limitC, system), reason: limitReasonWords(load.limitReason), source: load.limitSource, standing: load.limitStanding })}
       </p>
       <h3>{t('jobsTitle')}</h3>
       <ul className="lb-load-joblist">

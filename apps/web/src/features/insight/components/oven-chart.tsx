@@ -19,7 +19,9 @@ export function OvenChart({ insight, onPoint }: OvenChartProps) {
   const shown = points.slice(-MOST_DRAWN);
   const skipped = points.length - shown.length;
   const percent = (fraction: number) => fraction * 100;
-  const drawing = ovenChartDrawing({
+  const drawn = (narrow: boolean) =>
+    ovenChartDrawing({
+      narrow,
     title: t('chartTitle', { name: oven.name }),
     unit: '%',
     centre: percent(chart.centre),
@@ -30,9 +32,17 @@ export function OvenChart({ insight, onPoint }: OvenChartProps) {
     baseLast: Math.max(0, chart.base.last - skipped),
     points: shown.map((p) => ({ label: pointName(p), value: percent(p.change), movingRange: p.movingRange === null ? null : percent(p.movingRange), hits: p.hits.map((h) => h.words), rangeBeyondLimit: p.rangeBeyondLimit })),
   });
+  const marks = onPoint ? { onMark: (mark: string) => onPoint(skipped + Number(mark.replace('job-', ''))) } : {};
   return (
     <>
-      <Drawing drawing={drawing} {...(onPoint ? { onMark: (mark) => onPoint(skipped + Number(mark.replace('job-', ''))) } : {})} />
+      <div className="lb-oven-chart">
+        <div className="lb-oven-wide">
+          <Drawing drawing={drawn(false)} {...marks} />
+        </div>
+        <div className="lb-oven-narrow">
+          <Drawing drawing={drawn(true)} {...marks} />
+        </div>
+      </div>
       {skipped > 0 && <p className="muted lb-oven-small">{t('lastOf', { shown: shown.length, all: points.length, first: chart.base.first, last: chart.base.last })}</p>}
     </>
   );

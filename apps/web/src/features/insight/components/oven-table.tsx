@@ -2,6 +2,7 @@ import { Button } from '@blueprintjs/core';
 import type { OvenInsight, OvenPoint } from '@shared/insight';
 import { useState } from 'react';
 import { Link } from 'react-router-dom';
+import '../../../components/data-table.css';
 import { StateMark } from '../../../components/state-mark.js';
 import { calendarDay } from '../../../lib/format.js';
 import { useMay } from '../../../lib/me.js';

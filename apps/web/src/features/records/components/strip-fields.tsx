@@ -6,6 +6,7 @@ import { QuantityField } from '../../../components/quantity-field.js';
 import { VerdictTag } from '../../../components/verdict-tag.js';
 import { stripLimit, type StripValues } from '../strip-form.js';
 import { t } from '../text.js';
+import { FromLoad } from './from-load.js';
 import type { FieldsProps } from './record-form.js';
 
 const COLD = ['cold-pull', 'water-jet', 'chemical'];
@@ -43,7 +44,10 @@ export function StripFields({ context, readings }: FieldsProps<'strip'>) {
           <TextAreaField control={control} name="explanation" label={t('explanation')} help={t('explanationHelp')} optional />
         </div>
       </Panel>
-      <StripLimitPanel context={context} peakC={readings.partPeakC} method={readings.method} />
+      <div className="stack">
+        <StripLimitPanel context={context} peakC={readings.partPeakC} method={readings.method} />
+        <FromLoad context={context} />
+      </div>
     </div>
   );
 }
