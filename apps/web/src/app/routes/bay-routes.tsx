@@ -3,6 +3,7 @@ import type { RouteObject } from 'react-router-dom';
 export const bayRoutes: RouteObject[] = [
   { path: 'bay', lazy: () => import('./bay/bay-page.js').then((m) => ({ Component: m.BayPage })) },
   { path: 'bay/instruments', lazy: () => import('./bay/instruments-page.js').then((m) => ({ Component: m.InstrumentsPage })) },
+  { path: 'bay/instruments/:id', lazy: () => import('./bay/instrument-page.js').then((m) => ({ Component: m.InstrumentPage })) },
   { path: 'bay/burnouts', lazy: () => import('./bay/burnouts-page.js').then((m) => ({ Component: m.BurnoutsPage })) },
   { path: 'bay/burnouts/new', lazy: () => import('./bay/new-burnout-page.js').then((m) => ({ Component: m.NewBurnoutPage })) },
   { path: 'bay/burnouts/:id', lazy: () => import('./bay/burnout-page.js').then((m) => ({ Component: m.BurnoutPage })) },

@@ -28,5 +28,6 @@ export const t = defineText({
   noOvens: 'No oven is entered.',
   instruments: 'Instruments',
   toInstruments: 'To the register of instruments',
+  toEquipment: 'Change supplies, cables, ovens',
   standing: '{good} in calibration, {soon} due soon, {overdue} overdue',
 });

@@ -1,4 +1,3 @@
-import type { InstrumentView } from '@shared/instruments';
 import { defineText } from '../../lib/text.js';
 
 export const t = defineText({
@@ -7,6 +6,7 @@ export const t = defineText({
   toBay: 'To the bay',
   add: 'Add an instrument',
   edit: 'Change {tag}',
+  change: 'Change',
   list: 'Instruments of the bay',
   tag: 'Tag',
   kind: 'Kind',
@@ -34,18 +34,4 @@ export const t = defineText({
   errorHelp: 'Limits of error as the maker states them.',
 });
 
-const KINDS: Record<InstrumentView['kind'], string> = {
-  voltmeter: 'Voltmeter',
-  ammeter: 'Ammeter',
-  wattmeter: 'Wattmeter',
-  thermometer: 'Thermometer',
-  'insulation-tester': 'Insulation tester',
-  'micro-ohmmeter': 'Micro-ohmmeter',
-  'high-potential-tester': 'High-potential tester',
-  'surge-tester': 'Surge tester',
-  'vibration-meter': 'Vibration meter',
-  tachometer: 'Tachometer',
-  'clamp-meter': 'Clamp meter',
-};
-export const instrumentKindName = (kind: InstrumentView['kind']): string => KINDS[kind];
-export const INSTRUMENT_KIND_OPTIONS = (Object.entries(KINDS) as [InstrumentView['kind'], string][]).map(([value, label]) => ({ value, label }));
+export { INSTRUMENT_KIND_OPTIONS, instrumentKindName } from '../../lib/instrument-kinds.js';

@@ -6,6 +6,7 @@ export const t = defineText({
   limits: 'Acceptance limits',
   people: 'People',
   messages: 'Messages',
+  equipment: 'Supplies, cables, ovens',
   instruments: 'Instruments',
 
   // limits

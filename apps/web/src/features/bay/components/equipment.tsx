@@ -45,6 +45,9 @@ export function Equipment({ bay }: { readonly bay: BayView }) {
           <p className="num">{t('standing', { good: count('in-calibration'), soon: count('due-soon'), overdue: count('overdue') })}</p>
           <Link className="lb-equipment-link" to="/bay/instruments">
             {t('toInstruments')}
+          </Link>{' '}
+          <Link className="lb-equipment-link" to="/shop/equipment">
+            {t('toEquipment')}
           </Link>
         </div>
       </div>

@@ -1,5 +1,6 @@
 import { Button } from '@blueprintjs/core';
 import type { InstrumentView } from '@shared/instruments';
+import { Link } from 'react-router-dom';
 import { DataTable } from '../../../components/data-table.js';
 import { calendarDay } from '../../../lib/format.js';
 import { instrumentKindName, t } from '../text.js';
@@ -15,7 +16,16 @@ export function InstrumentList({ instruments, onEdit }: { readonly instruments: 
       rows={[...instruments].sort(byUrgency)}
       rowKey={(i) => i.id}
       columns={[
-        { key: 'tag', title: t('tag'), cell: (i) => (onEdit ? <Button variant="minimal" text={i.tag} aria-label={t('edit', { tag: i.tag })} onClick={() => onEdit(i)} /> : <b>{i.tag}</b>) },
+        {
+          key: 'tag',
+          title: t('tag'),
+          cell: (i) => (
+            <span className="row">
+              <Link to={`/bay/instruments/${i.id}`}>{i.tag}</Link>
+              {onEdit && <Button size="small" variant="minimal" text={t('change')} aria-label={t('edit', { tag: i.tag })} onClick={() => onEdit(i)} />}
+            </span>
+          ),
+        },
         { key: 'kind', title: t('kind'), cell: (i) => instrumentKindName(i.kind) },
         { key: 'description', title: t('description'), cell: (i) => [i.description, i.rangeText].filter(Boolean).join(', ') },
         { key: 'error', title: t('errorTitle'), cell: (i) => t('error', { reading: i.percentOfReading, range: i.percentOfRange }) },

@@ -10,6 +10,7 @@ export function ShopTabs() {
     { path: '/shop/limits', name: t('limits'), open: permissions.includes('limits.read') },
     { path: '/shop/people', name: t('people'), open: permissions.includes('users.manage') },
     { path: '/shop/messages', name: t('messages'), open: permissions.includes('messages.read') },
+    { path: '/shop/equipment', name: t('equipment'), open: permissions.includes('instruments.read') },
     { path: '/bay/instruments', name: t('instruments'), open: permissions.includes('instruments.read') },
   ];
   return (
