@@ -1,4 +1,5 @@
 import type { UnitSystem } from '@libs/quantities';
+import type { JobLoad } from '@shared/burnouts';
 import type { Entered } from '@shared/fields';
 import type { BayView } from '@shared/instruments';
 import type { JobSheet } from '@shared/jobs';
@@ -17,6 +18,8 @@ export interface RecordContext {
   readonly limits: LimitsSet;
   readonly bay: BayView;
   readonly system: UnitSystem;
+  /** burnout loads the job stood in, where the strip is recorded */
+  readonly loads?: readonly JobLoad[];
 }
 
 /** A form read: NaN stands where a figure is missing or cannot be read. */

@@ -11,6 +11,7 @@ import { KeptRecord } from '../../../features/records/components/kept-record.js'
 import { FORM_KINDS, WorkForm } from '../../../features/records/components/work-form.js';
 import type { FormKind } from '../../../features/records/record-definition.js';
 import { ELECTRICAL_CAUTIONS, OVEN_CAUTIONS, t } from '../../../features/records/text.js';
+import { jobLoadsQuery } from '../../../lib/burnout-queries.js';
 import { jobRecordsQuery, jobSheetQuery } from '../../../lib/job-queries.js';
 import { bayQuery, limitsQuery, recordsOfKind } from '../../../lib/job-records.js';
 import { recordName } from '../../../lib/record-names.js';
@@ -36,6 +37,7 @@ function WorkOf({ id, kind }: { readonly id: string; readonly kind: FormKind }) 
   const records = useQuery(jobRecordsQuery(id));
   const bay = useQuery(bayQuery);
   const limits = useQuery({ ...limitsQuery(job.data?.limitsVersion ?? 1), enabled: job.data !== undefined });
+  const loads = useQuery({ ...jobLoadsQuery(id), enabled: kind === 'strip' });
   const onKept = (_: RecordView) => {
     tell(t('saved', { record: recordName(kind) }));
     void navigate(`/jobs/${id}/work/${kind}`, { replace: true });
@@ -57,7 +59,7 @@ function WorkOf({ id, kind }: { readonly id: string; readonly kind: FormKind }) 
                   <Answer query={bay}>
                     {(view) => (
                       <WithCautions kind={kind} title={title}>
-                        <WorkForm key={`${kind}${amend?.id ?? params.get('again') ?? ''}`} kind={kind} context={{ job: sheet, records: all, limits: set, bay: view, system }} amend={amend} onKept={onKept} />
+                        <WorkForm key={`${kind}${amend?.id ?? params.get('again') ?? ''}`} kind={kind} context={{ job: sheet, records: all, limits: set, bay: view, system, loads: loads.data ?? [] }} amend={amend} onKept={onKept} />
                       </WithCautions>
                     )}
                   </Answer>

@@ -1,13 +1,11 @@
 import { Button } from '@blueprintjs/core';
 import type { JobLoad } from '@shared/burnouts';
 import { formatUsual } from '@libs/quantities';
-import { useQuery } from '@tanstack/react-query';
 import { useFormContext } from 'react-hook-form';
 import { Link } from 'react-router-dom';
 import { Panel } from '../../../components/panel.js';
 import { StateMark } from '../../../components/state-mark.js';
 import { isVerdict, VerdictTag } from '../../../components/verdict-tag.js';
-import { jobLoadsQuery } from '../../../lib/burnout-queries.js';
 import { calendarDay } from '../../../lib/format.js';
 import { loadText as t } from '../from-load-text.js';
 import type { RecordContext } from '../record-definition.js';
@@ -15,12 +13,12 @@ import { takenFromLoad, type StripValues } from '../strip-form.js';
 
 /** What the logger of the job's load wrote: peak and minutes are taken over by one tap instead of by hand. */
 export function FromLoad({ context }: { readonly context: RecordContext }) {
-  const loads = useQuery(jobLoadsQuery(context.job.id));
-  if (!loads.data || loads.data.length === 0) return null;
+  const { loads = [] } = context;
+  if (loads.length === 0) return null;
   return (
     <Panel title={t('title')}>
       <ul className="lb-plain">
-        {loads.data.map((load) => (
+        {loads.map((load) => (
           <li key={load.id}>
             <OneLoad load={load} context={context} />
           </li>
