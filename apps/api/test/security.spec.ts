@@ -311,3 +311,20 @@ describe('what people write', () => {
     expect(csv).not.toMatch(/(^|,)"?[=+@＝]/m);
   });
 });
+
+describe('a paper opened in a tab of its own', () => {
+  const opened = { 'sec-fetch-dest': 'document', accept: 'text/html' };
+
+  it('that is not there is answered with words and a way on, and a page that asks for it still gets data', async () => {
+    const path = '/api/papers/01a1e84e-0000-7000-8000-000000000000/pdf';
+    const page = await get(path, opened);
+    expect([page.status, String(page.headers['content-type'])]).toEqual([404, 'text/html; charset=utf-8']);
+    expect(page.text).toContain('<a href="/">To the start</a>');
+    expect(String((await get(path)).headers['content-type'])).toContain('application/json');
+  });
+
+  it('by somebody who is not signed in asks to sign in, and shows nothing of the paper', async () => {
+    const page = await get('/api/papers/01a1e84e-0000-7000-8000-000000000000/pdf', opened, null);
+    expect([page.status, page.text]).toEqual([401, expect.stringContaining('Sign in')]);
+  });
+});
