@@ -1,10 +1,11 @@
 import { useQuery } from '@tanstack/react-query';
-import { ROUTE_STEPS, type Step } from '@shared/route';
+import { hasReached, ROUTE_STEPS, type Step } from '@shared/route';
 import type { JobSheet } from '@shared/jobs';
 import { Link, useParams, useSearchParams } from 'react-router-dom';
 import { Answer, Failed, Waiting } from '../../../components/faces.js';
 import { sheetsOf, Spine } from '../../../components/spine.js';
 import { JobMoney } from '../../../features/accounts/components/job-money.js';
+import { JobLoads } from '../../../features/burnouts/components/job-loads.js';
 import { AttachmentsPanel } from '../../../features/attachments/components/attachments-panel.js';
 import { CorePanel } from '../../../features/jobs/components/core-panel.js';
 import { CreditPanel } from '../../../features/jobs/components/credit-panel.js';
@@ -69,6 +70,7 @@ function Sheet({ job }: { readonly job: JobSheet }) {
             </div>
             <div className="stack">
               {records.data && job.route !== 'coil-rewind' && (job.route !== 'recondition' || recorded.has('core-test-after')) && <CorePanel records={records.data} />}
+              {hasReached(job.route, job.step, 'strip-and-burnout') && <JobLoads jobId={job.id} />}
               <FactsPanel job={job} />
             </div>
           </div>
