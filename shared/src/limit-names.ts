@@ -1,6 +1,6 @@
 import type { CoreLimits } from '@libs/core-loss';
 import type { MachineTestLimitKey } from '@libs/machine-tests';
-import type { BurnoutLimits } from './limits.js';
+import type { BurnoutLimits } from './limit-set.js';
 
 /** What the shop calls its limits, on the screen and in the history alike. */
 export const CORE_LIMIT_NAMES: Record<Exclude<keyof CoreLimits, 'sources'>, string> = {

@@ -1,38 +1,15 @@
-import type { CoreLimits } from '@libs/core-loss';
-import type { MachineTestLimits } from '@libs/machine-tests';
 import { formatUsual } from '@libs/quantities';
 import { z } from 'zod';
 import { finite, requiredLine } from './fields.js';
 import { limitDifferenceSchema } from './limit-differences.js';
 import { outOfOrder } from './limit-order.js';
 import { CORE_SOURCE_KEYS, LIMIT_ROWS, type LimitRow } from './limit-rows.js';
+import type { BurnoutLimits, BurnoutSource, LimitsSet } from './limit-set.js';
 import { at } from './limit-values.js';
 
+export type { BurnoutLimits, BurnoutSource, LimitsSet };
+
 export const STANDINGS = ['S', 'P', 'C'] as const;
-/** Where one limit of a strip comes from, and how far it stands. */
-export interface BurnoutSource {
-  readonly source: string;
-  readonly standing: string;
-}
-
-/** What a strip may do to the part, in °C; the lowest that applies counts. */
-export interface BurnoutLimits {
-  readonly organicOrUnknownC: number;
-  readonly inorganicC: number;
-  readonly aluminiumFrameC: number;
-  /** of all three together, as a strip's record prints it */
-  readonly source: string;
-  readonly standing: string;
-  /** of each, in versions published by the shop */
-  readonly sources?: { readonly organicOrUnknownC: BurnoutSource; readonly inorganicC: BurnoutSource; readonly aluminiumFrameC: BurnoutSource };
-}
-
-/** The acceptance limits of the shop, as one published version. */
-export interface LimitsSet {
-  readonly core: CoreLimits;
-  readonly machine: MachineTestLimits;
-  readonly burnout: BurnoutLimits;
-}
 
 const CORE_PLATE = 'ANSI/EASA AR100-2015 clause 3.3';
 export const DEFAULT_BURNOUT_LIMITS: BurnoutLimits = {
