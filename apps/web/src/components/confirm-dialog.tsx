@@ -13,15 +13,17 @@ interface ConfirmDialogProps {
   readonly cancel?: string;
   readonly pending?: boolean;
   readonly error?: unknown;
+  /** for a table of what changes */
+  readonly wide?: boolean;
   readonly onConfirm: () => void;
   readonly onClose: () => void;
   readonly children?: ReactNode;
 }
 
 /** Asked before something that cannot be taken back, or that needs a word with it. */
-export function ConfirmDialog({ open, title, confirm, cancel = t('cancel'), pending, error, onConfirm, onClose, children }: ConfirmDialogProps) {
+export function ConfirmDialog({ open, title, confirm, cancel = t('cancel'), pending, error, wide = false, onConfirm, onClose, children }: ConfirmDialogProps) {
   return (
-    <Dialog isOpen={open} onClose={onClose} title={title}>
+    <Dialog isOpen={open} onClose={onClose} title={title} style={wide ? { width: 'min(860px, 94vw)' } : undefined}>
       <form
         noValidate
         onSubmit={(e) => {

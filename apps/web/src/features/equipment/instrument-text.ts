@@ -44,7 +44,7 @@ export const t = defineText({
   outside: 'outside its limits of error',
   'not-stated': 'not stated',
   asFoundWords: 'What was off, and by how much',
-  asFoundWordsHelp: 'What was measured since the calibration before is looked at by it.',
+  asFoundWordsHelp: 'The records made since the calibration before are looked at with it.',
   percentOfReading: 'Error, % of reading',
   percentOfRange: 'Error, % of range',
   percentHelp: 'As the maker or the certificate states it.',

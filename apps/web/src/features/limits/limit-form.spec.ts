@@ -69,6 +69,12 @@ describe('the form of the limits', () => {
   });
 });
 
+describe('several things wrong at once', () => {
+  it('are told in the order they stand on the page', () => {
+    expect(paths({ note: '', 'set.machine.polarizationIndex.value': si('two'), 'set.core.increaseLimit': si('x'), 'set.core.hotSpotLimitK': si('8') })).toEqual(['set.core.increaseLimit', 'set.core.sources.hot-spot.source', 'set.machine.polarizationIndex.value', 'note']);
+  });
+});
+
 describe('a version published meanwhile', () => {
   const theirs: LimitsVersionView = { ...FIRST, version: 2, publishedBy: 'Mo Manager', set: structuredClone(SET) };
   const core = theirs.set['core'] as Record<string, unknown>;

@@ -72,6 +72,12 @@ export function readSet(form: LimitForm, base: unknown, reader = new FormReader(
   return set;
 }
 
+/** How far down the page a field stands: the first thing that is wrong is the one the cursor goes to. */
+function placeOf(path: string): number {
+  const place = LIMIT_ROWS.findIndex((row) => path === `set.${row.valuePath}` || (row.sourcePath !== null && path.startsWith(`set.${row.sourcePath}.`)));
+  return place === -1 ? LIMIT_ROWS.length : place;
+}
+
 export interface ReadLimits {
   readonly input: PublishLimits | null;
   readonly problems: readonly FormProblem[];
@@ -87,7 +93,8 @@ export function readLimits(form: LimitForm, base: LimitsVersionView, words: { re
   // the contract looks at the order only when all is there; a person wants to hear everything at once
   const order = outOfOrder((path) => at(set, path)).map(({ path, message }) => ({ path: `set.${path}`, message }));
   const seen = new Set<string>();
-  const problems = [...reader.problems, ...(parsed.success ? [] : problemsOf(parsed.error)), ...order, ...open].filter(({ path }) => !seen.has(path) && seen.add(path));
+  const found = [...reader.problems, ...(parsed.success ? [] : problemsOf(parsed.error)), ...order, ...open].filter(({ path }) => !seen.has(path) && seen.add(path));
+  const problems = found.sort((a, b) => placeOf(a.path) - placeOf(b.path));
   return { input: problems.length === 0 && parsed.success ? parsed.data : null, problems };
 }
 

@@ -41,6 +41,9 @@ function coreBlocks(): LimitBlock[] {
 
 const oneByOne = (rows: readonly LimitRow[]): LimitBlock[] => rows.map((row) => ({ key: row.valuePath, title: row.name, sourcePath: row.sourcePath, rows: [row] }));
 
+/** What stands on a source, under its heading. */
+export const sourceTitle = (sourcePath: string): string => LIMIT_SECTIONS.flatMap((s) => s.blocks).find((b) => b.sourcePath === sourcePath)?.title ?? sourcePath;
+
 /** Every limit once, in the order a person reads them. */
 export const LIMIT_SECTIONS: readonly LimitSection[] = [
   { key: 'core', title: t('core'), blocks: coreBlocks(), withRule: true },

@@ -20,10 +20,12 @@ export const t = defineText({
   noneWords: 'Nothing can be judged without them. The application brings a first version; speak with whoever runs it.',
   nowInForce: 'Version {version}, in force',
   backToAll: 'All versions',
+  titleOf: 'Acceptance limits, version {version}',
+  inForceNow: 'In force.',
+  notInForce: 'No longer in force.',
   published: 'Published {when} by {who}.',
   notThere: 'There is no version {version}',
   notThereWords: 'Choose one of the list.',
-  shippedWords: 'The limits the shop began with are each to be confirmed by its engineer.',
 
   // one version
   limit: 'Limit',
@@ -106,7 +108,5 @@ export const t = defineText({
   done: 'Version {version} is in force.',
   nothing: 'Nothing differs from the version in force.',
   sourceOf: '{name}: source',
-  ruleValue: '{words}',
   theirsMeanwhile: 'Version {version} was published meanwhile by {who}: {note}',
-  onTheirs: 'Put my changes on version {version}',
 });

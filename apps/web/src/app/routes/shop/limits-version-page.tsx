@@ -38,14 +38,14 @@ function OneVersion({ shown, all }: { readonly shown: LimitsVersionView; readonl
   const [params, setParams] = useSearchParams();
   const beside = all.find((v) => v !== shown && String(v.version) === params.get('with'));
   const [older, newer] = beside && beside.version < shown.version ? [beside, shown] : [shown, beside];
-  const words = shown === all[0] ? t('inForce') : t('earlier');
+  const words = shown === all[0] ? t('inForceNow') : t('notInForce');
   return (
     <div className="stack">
       <PageHeader
-        title={`${t('title')}, ${t('versionNo', { version: shown.version })}`}
+        title={t('titleOf', { version: shown.version })}
         below={
           <>
-            {words}. {t('published', { when: momentOf(shown.publishedAt), who: shown.publishedBy })} {shown.note} <Link to="/shop/limits">{t('backToAll')}</Link>
+            {words} {t('published', { when: momentOf(shown.publishedAt), who: shown.publishedBy })} {shown.note} <Link to="/shop/limits">{t('backToAll')}</Link>
           </>
         }
         actions={

@@ -54,7 +54,7 @@ export function EquipmentEditor({ equipment }: { readonly equipment: EquipmentVi
   };
   return (
     <form
-      className="stack"
+      className="stack lb-equipment-form"
       noValidate
       onSubmit={(e) => {
         e.preventDefault();

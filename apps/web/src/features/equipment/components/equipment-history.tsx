@@ -7,7 +7,7 @@ import './equipment.css';
 /** Who changed the lists last, and what records may still name. */
 export function EquipmentHistory({ changes, removed }: Pick<EquipmentView, 'changes' | 'removed'>) {
   return (
-    <div className="two-columns">
+    <div className={removed.length > 0 ? 'two-columns' : undefined}>
       <Panel title={t('changes')}>
         {changes.length === 0 ? (
           <p className="muted">{t('noChanges')}</p>

@@ -19,20 +19,20 @@ const COLUMNS: readonly Column<MeasuredRow>[] = [
     key: 'job',
     title: t('job'),
     cell: (r) => (
-      <>
+      <span>
         <Link to={`/jobs/${r.jobId}`}>{r.jobNumber}</Link> <span className="muted">{t(r.jobState)}</span>
-      </>
+      </span>
     ),
   },
   {
     key: 'record',
     title: t('recordOf'),
     cell: (r) => (
-      <>
+      <span>
         <Link to={`/records/${r.recordId}/revisions`}>{r.ordinal > 1 ? t('recordNo', { name: recordName(r.kind), n: r.ordinal }) : recordName(r.kind)}</Link>
         {r.superseded && <span className="muted"> {t('corrected')}</span>}
         {r.overdueThen && <span className="muted"> {t('overdueThen')}</span>}
-      </>
+      </span>
     ),
   },
   { key: 'verdict', title: t('verdict'), cell: (r) => (isVerdict(r.verdict) ? <VerdictTag verdict={r.verdict} /> : <span className="muted">–</span>) },

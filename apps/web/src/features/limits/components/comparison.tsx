@@ -28,7 +28,7 @@ function SideBySide({ from, to, differences }: { readonly from: LimitsVersionVie
     cell: ({ row, path }) => {
       const source = row && sourceOf(version.set, row);
       return (
-        <>
+        <span>
           <b className="num">
             <LimitValue set={version.set} row={row} />
           </b>
@@ -37,7 +37,7 @@ function SideBySide({ from, to, differences }: { readonly from: LimitsVersionVie
               {source.source} <span className="muted">({standingWords(source.standing)})</span>
             </span>
           )}
-        </>
+        </span>
       );
     },
   });

@@ -34,7 +34,7 @@ export function LimitBlockFields({ control, block, base, headed }: BlockProps) {
   const typed = useWatch({ control, name: block.rows.map((row) => `set.${row.valuePath}` as Path) }) as unknown as readonly (Typed | undefined)[];
   const changed = block.rows.map((row, i) => isChanged(typed[i], row, base.set));
   return (
-    <div className="lb-limit-block">
+    <div className={`lb-limit-block${headed ? '' : ' lb-limit-single'}`}>
       {headed && <h3>{block.title}</h3>}
       <div className="fields">
         {block.rows.map((row, i) => {
@@ -74,7 +74,7 @@ function SourceFields({ control, title, path, row, base, figureChanged }: Source
   const wrong = get(errors, sourceName) !== undefined || get(errors, standingName) !== undefined;
   if (!asked && !figureChanged && same && !wrong) {
     return (
-      <div className="row spread lb-limit-source-line">
+      <div className="row spread lb-limit-source">
         <span className="lb-limit-text">
           {source} <span className="muted">({standingWords(standing)})</span>
         </span>
@@ -83,13 +83,13 @@ function SourceFields({ control, title, path, row, base, figureChanged }: Source
     );
   }
   return (
-    <>
+    <div className="lb-limit-source">
       {figureChanged && same && <CheckField control={control} name={`confirmed.${confirmedKey(path)}` as Path} label={t('stillStands')} help={t('stillStandsHelp')} />}
       <div className="lb-limit-source-fields">
         <TextField control={control} name={sourceName} label={t('sourceLabel', { name: title })} help={t('sourceHelp')} />
         <SelectField control={control} name={standingName} label={t('standingLabel', { name: title })} options={STANDING_OPTIONS} />
       </div>
-    </>
+    </div>
   );
 }
 

@@ -96,7 +96,7 @@ export function LimitsEditor({ versions, onPublished, onCancel }: EditorProps) {
   };
   return (
     <form
-      className="stack"
+      className="stack lb-limits-form"
       noValidate
       onSubmit={(e) => {
         e.preventDefault();

@@ -5,6 +5,7 @@ import type { UnitSystem } from '@libs/quantities';
 import { ConfirmDialog } from '../../../components/confirm-dialog.js';
 import type { Difference } from '../../../components/notices.js';
 import { useUnits } from '../../../components/units.js';
+import { sourceTitle } from '../limit-sections.js';
 import { t } from '../text.js';
 import './limits.css';
 
@@ -15,18 +16,25 @@ interface Line {
   readonly to: string;
 }
 
-/** A difference as it is read in the person's units; a source written anew has a line of its own. */
-function linesOf(d: LimitDifference, units: UnitSystem): Line[] {
-  const row = LIMIT_ROWS.find((r) => r.valuePath === d.path);
-  const words = (side: LimitDifference['from']) => (row && side.value !== null ? limitWords(side.value, row, units) : side.words);
-  const source = (side: LimitDifference['from']) => (side.source === '' ? '–' : `${side.source} (${standingWords(side.standing)})`);
-  return [
-    ...(d.valueChanged ? [{ key: d.path, name: d.name, from: words(d.from), to: words(d.to) }] : []),
-    ...(d.sourceChanged ? [{ key: `${d.path}.source`, name: t('sourceOf', { name: d.name }), from: source(d.from), to: source(d.to) }] : []),
-  ];
+const sourceWords = (side: LimitDifference['from']) => (side.source === '' ? '–' : `${side.source} (${standingWords(side.standing)})`);
+
+/** What differs, as it is read in the person's units: figures one by one, and each source that was written anew once. */
+export function linesOf(differences: readonly LimitDifference[], units: UnitSystem): Line[] {
+  const told = new Set<string>();
+  return differences.flatMap((d) => {
+    const row = LIMIT_ROWS.find((r) => r.valuePath === d.path);
+    const words = (side: LimitDifference['from']) => (row && side.value !== null ? limitWords(side.value, row, units) : side.words);
+    const lines: Line[] = d.valueChanged ? [{ key: d.path, name: d.name, from: words(d.from), to: words(d.to) }] : [];
+    const sourcePath = row?.sourcePath ?? null;
+    if (d.sourceChanged && sourcePath !== null && !told.has(sourcePath)) {
+      told.add(sourcePath);
+      lines.push({ key: sourcePath, name: t('sourceOf', { name: sourceTitle(sourcePath) }), from: sourceWords(d.from), to: sourceWords(d.to) });
+    }
+    return lines;
+  });
 }
 
-export const conflictLines = (differences: readonly LimitDifference[], units: UnitSystem): Difference[] => differences.flatMap((d) => linesOf(d, units)).map(({ name, from, to }) => ({ label: name, theirs: from, yours: to }));
+export const conflictLines = (differences: readonly LimitDifference[], units: UnitSystem): Difference[] => linesOf(differences, units).map(({ name, from, to }) => ({ label: name, theirs: from, yours: to }));
 
 interface PublishDialogProps {
   readonly open: boolean;
@@ -43,7 +51,7 @@ interface PublishDialogProps {
 export function PublishDialog({ open, version, note, differences, pending, error, onPublish, onClose }: PublishDialogProps) {
   const units = useUnits();
   return (
-    <ConfirmDialog open={open} title={t('publishTitle', { version })} confirm={t('publish')} pending={pending} error={error} onConfirm={onPublish} onClose={onClose}>
+    <ConfirmDialog open={open} title={t('publishTitle', { version })} confirm={t('publish')} wide pending={pending} error={error} onConfirm={onPublish} onClose={onClose}>
       <p>{t('publishWords')}</p>
       <p>
         <b>{t('note')}:</b> {note}
@@ -58,15 +66,13 @@ export function PublishDialog({ open, version, note, differences, pending, error
             </tr>
           </thead>
           <tbody>
-            {differences
-              .flatMap((d) => linesOf(d, units))
-              .map((line) => (
-                <tr key={line.key}>
-                  <th scope="row">{line.name}</th>
-                  <td>{line.from}</td>
-                  <td>{line.to}</td>
-                </tr>
-              ))}
+            {linesOf(differences, units).map((line) => (
+              <tr key={line.key}>
+                <th scope="row">{line.name}</th>
+                <td>{line.from}</td>
+                <td>{line.to}</td>
+              </tr>
+            ))}
           </tbody>
         </table>
       </div>

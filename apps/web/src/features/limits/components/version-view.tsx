@@ -37,10 +37,10 @@ export function VersionView({ version, before }: { readonly version: LimitsVersi
       cell: ({ path, name, row }) => {
         const change = changes.get(path);
         return (
-          <>
+          <span>
             {name}
             {change && <span className="lb-limit-changed">{change.valueChanged ? t('changedHere', { words: was(change, row) }) : t('sourceChangedHere')}</span>}
-          </>
+          </span>
         );
       },
     },
