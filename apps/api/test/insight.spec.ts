@@ -115,3 +115,24 @@ describe('asking about an oven', () => {
     await staff.office.get('/api/insight/ovens/O1').expect(403);
   });
 });
+
+describe('the day of a point', () => {
+  it('is that of the load the job was stripped from, not of a later one', async () => {
+    const job = await BenchJob.book({ staff, meters }, 1);
+    await job.toCoreBefore();
+    await job.record('core-test-before', job.ring('1 before'));
+    await job.moveTo('awaiting-approval');
+    await job.quoteApproved();
+    await job.moveTo('strip-and-burnout');
+    const load = (day: string) => staff.technician.post('/api/burnouts', { ovenId: 'O1', day, jobs: [{ jobId: job.id, ringsOff: false }], remark: '', countedAndSampled: true }).expect(201);
+    await load('2026-02-28');
+    await job.record('strip', job.strip());
+    await job.moveTo('core-test-after');
+    await job.record('core-test-after', job.ring('1 after'));
+    shop.clock.forward(9 * 24 * 3_600_000);
+    const again = await shop.person(['technician']);
+    await again.post('/api/burnouts', { ovenId: 'O1', day: '2026-03-11', jobs: [{ jobId: job.id, ringsOff: false }], remark: '', countedAndSampled: true }).expect(201);
+    const seen = ovenInsightSchema.parse((await again.get('/api/insight/ovens/O1').expect(200)).body);
+    expect(seen.points.find((p) => p.job?.id === job.id)?.day).toBe('2026-02-28');
+  });
+});

@@ -18,10 +18,11 @@ import { ovenSeries, type EntryRow, type StripRow } from './oven-series.js';
 
 /**
  * Every strip in the oven with the first valid test after it, up to the next strip of that job. Records are compared by
- * their identifiers, which sort by the time they were made. The day is that of the load where there is one.
+ * their identifiers, which sort by the time they were made. The day is that of the last load before the strip
+ * was written down, where there is one.
  */
 const STRIPS = `SELECT s.id AS stripId, s.jobId, j.number, m.description AS machine, s.createdAt,
-    (SELECT MAX(b.day) FROM burnout_load_jobs x JOIN burnout_loads b ON b.id = x.loadId WHERE x.jobId = s.jobId AND b.ovenId = json_extract(v.readings, '$.ovenId')) AS loadDay,
+    (SELECT MAX(b.day) FROM burnout_load_jobs x JOIN burnout_loads b ON b.id = x.loadId WHERE x.jobId = s.jobId AND b.ovenId = json_extract(v.readings, '$.ovenId') AND b.day <= date(s.createdAt, '+1 day')) AS loadDay,
     t.id AS testId, t.increase AS "change",
     (SELECT MIN(r.id) FROM job_records r WHERE r.jobId = s.jobId AND r.kind = 'core-repair' AND r.id > s.id AND r.id < COALESCE(n.id, '~')) AS repairId,
     (SELECT COUNT(*) FROM job_records a WHERE a.jobId = s.jobId AND a.kind = 'core-test-after' AND a.id > s.id AND a.id < COALESCE(n.id, '~')) AS tests

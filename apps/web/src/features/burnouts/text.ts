@@ -81,7 +81,7 @@ export const t = defineText({
 
   judged: 'How it went',
   noFile: 'The logger’s file is still to come',
-  noFileWords: 'Drop it below when the load is cold. Until then nobody can tell whether the limit was kept.',
+  noFileWords: 'Hand it in when the load is cold. Until then nobody can tell whether the limit was kept.',
   reason_over: '{channel} came to {peak}: {over} over the limit.',
   reason_gap: '{channel} was not read from {from} to {to}; it may have come to {reach} meanwhile.',
   reason_gapUnknown: '{channel} was not read from {from} to {to}; how hot it came meanwhile cannot be told.',

@@ -21,7 +21,7 @@ export function BayPage() {
         title={t('title')}
         below={t('queue')}
         actions={
-          <Link className="lb-load-go" to="/bay/burnouts">
+          <Link className="lb-load-go lb-load-go-quiet" to="/bay/burnouts">
             {burnoutText('title')}
           </Link>
         }
