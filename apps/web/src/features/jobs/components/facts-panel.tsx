@@ -3,6 +3,7 @@ import { moveLimitsSchema, type JobSheet } from '@shared/jobs';
 import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { useForm } from 'react-hook-form';
+import { Link } from 'react-router-dom';
 import { ConfirmDialog } from '../../../components/confirm-dialog.js';
 import { TextField } from '../../../components/fields.js';
 import { Facts, Panel } from '../../../components/panel.js';
@@ -49,7 +50,7 @@ export function FactsPanel({ job }: { readonly job: JobSheet }) {
             ]}
           />
           <p className="muted row">
-            <span>{t('limits', { n: job.limitsVersion })}</span>
+            <Link to={`/shop/limits/${job.limitsVersion}`}>{t('limits', { n: job.limitsVersion })}</Link>
             {mayMoveLimits && newest > job.limitsVersion && <Button variant="minimal" text={t('newerLimits')} onClick={() => setNewer(true)} />}
           </p>
         </div>

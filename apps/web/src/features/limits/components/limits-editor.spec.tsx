@@ -55,7 +55,7 @@ describe('a new version of the limits', () => {
     expect(field(HOT_SPOT).value).toBe('10');
     expect(field('Increase over the before test, at most').value).toBe('20');
     expect(screen.getByText('Nothing changed yet')).toBeDefined();
-    expect(screen.getByText('The gate asks for a repeat, or for a manager’s release with a reason.')).toBeDefined();
+    expect(screen.getByText('The gate asks for a repeat, or for a manager’s release.')).toBeDefined();
   });
 
   it('is published after everything that changes was shown once more', async () => {
@@ -114,7 +114,7 @@ describe('a new version of the limits', () => {
   it('explains what an inconclusive result does under each rule', async () => {
     open();
     await person.click(screen.getByText('Hold it back'));
-    expect(screen.getByText('The gate holds it back until a repeat conforms, or a concession is signed.')).toBeDefined();
+    expect(screen.getByText('The gate holds it back until a repeat conforms.')).toBeDefined();
     expect(screen.getByText('1 changed')).toBeDefined();
   });
 

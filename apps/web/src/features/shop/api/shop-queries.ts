@@ -1,4 +1,3 @@
-import { limitsVersionViewSchema } from '@shared/limits';
 import { outboxListSchema } from '@shared/messages';
 import { userViewSchema, type CreateUser, type UpdateUser } from '@shared/session';
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
@@ -6,9 +5,8 @@ import { useState } from 'react';
 import { z } from 'zod';
 import { http, newKey } from '../../../lib/http.js';
 
-export const shopKeys = { users: ['users'] as const, limits: ['limits', 'versions'] as const, messages: ['messages'] as const };
+export const shopKeys = { users: ['users'] as const, messages: ['messages'] as const };
 
-export const limitsVersionsQuery = queryOptions({ queryKey: shopKeys.limits, queryFn: ({ signal }) => http.get('/limits', z.array(limitsVersionViewSchema), { signal }) });
 export const usersQuery = queryOptions({ queryKey: shopKeys.users, queryFn: ({ signal }) => http.get('/users', z.array(userViewSchema), { signal }) });
 export const messagesQuery = queryOptions({ queryKey: shopKeys.messages, queryFn: ({ signal }) => http.get('/messages', outboxListSchema, { signal }) });
 
