@@ -32,6 +32,17 @@ describe('burnoutCurveDrawing', () => {
     expect((zone!.x - 34) / perMinute(drawn())).toBeCloseTo(crossedUp, 4);
     expect(zone!.width / perMinute(drawn())).toBeCloseTo(crossedDown - crossedUp, 4);
   });
+  it('draws in Fahrenheit for whoever reads that, on the same curve', () => {
+    const fahrenheit = drawn({ fahrenheit: true, limit: { ...LIMIT, words: 'limit 698 °F' } });
+    expect(wordsOf(fahrenheit)).toEqual(expect.arrayContaining(['°F', '698 °F', '835 °F']));
+    expect(fahrenheit.description).toContain('peak 835 °F; limit 698 °F.');
+    expect(fahrenheit.table?.columns[1]).toBe('peak, °F');
+    const zone = (d: typeof fahrenheit) => hatches(d).map((h) => [h.x, h.width]);
+    expect(zone(fahrenheit)[0]![0]).toBeCloseTo(zone(drawn())[0]![0]!, 6);
+    expect(zone(fahrenheit)[0]![1]).toBeCloseTo(zone(drawn())[0]![1]!, 6);
+    expect(outOfFrame(fahrenheit)).toEqual([]);
+    expect(overlapping(fahrenheit)).toEqual([]);
+  });
   it('has no hatch where the core stayed below, and says so', () => {
     const cool = drawn({ channels: [{ ...core, peakC: 356, points: core.points.map((p) => ({ ...p, celsius: Math.min(p.celsius, 356) })), aboveLimit: { minutes: 0, unknownMinutes: 0 } }] });
     expect(hatches(cool)).toEqual([]);

@@ -21,6 +21,8 @@ export interface BurnoutCurveInput {
   /** with its words, such as 'limit 370 °C, core plate unknown' */
   readonly limit: { readonly celsius: number; readonly words: string } | null;
   readonly title?: string;
+  /** temperatures come in °C and are drawn in °F */
+  readonly fahrenheit?: boolean;
   /** for a phone: 340 units wide */
   readonly narrow?: boolean;
 }
@@ -36,7 +38,8 @@ const [TOP, HEIGHT, LINE] = [22, 190, 15];
  *
  * Source: own drawing.
  */
-export function burnoutCurveDrawing(input: BurnoutCurveInput): Drawing {
+export function burnoutCurveDrawing(asked: BurnoutCurveInput): Drawing {
+  const input = asked.fahrenheit ? inFahrenheit(asked) : asked;
   const width = input.narrow ? 340 : 560;
   const title = input.title ?? 'Burnout, temperature of the part';
   const channels = input.channels.filter((c) => c.points.length > 0);
@@ -57,20 +60,30 @@ export function burnoutCurveDrawing(input: BurnoutCurveInput): Drawing {
     title,
     description: words.join(' '),
     shapes: [
-      ...scales(plot, minutes, celsius),
+      ...scales(plot, minutes, celsius, unitOf(input)),
       ...hatched(input, hottest, plot),
       ...channels.filter((c) => c !== hottest).map((c) => curve(c, plot, false)),
       curve(hottest, plot, true),
       ...limitLine(input, plot),
-      ...peak(hottest, plot),
+      ...peak(hottest, plot, unitOf(input)),
       ...lines.map((text, i) => label(0, wordsFrom + i * LINE, text, 'start', 'text', 12)),
     ],
     table: {
-      columns: ['channel', 'peak, °C', 'min above the limit', 'min not known'],
+      columns: ['channel', `peak, ${unitOf(input)}`, 'min above the limit', 'min not known'],
       rows: channels.map((c) => [c.name, c.peakC.toFixed(1), c.aboveLimit ? c.aboveLimit.minutes.toFixed(0) : '–', c.aboveLimit ? c.aboveLimit.unknownMinutes.toFixed(0) : '–']),
     },
   };
 }
+
+const unitOf = ({ fahrenheit }: BurnoutCurveInput) => (fahrenheit ? '°F' : '°C');
+const fahrenheit = (celsius: number) => celsius * 1.8 + 32;
+
+/** The same record on the other scale; what is called Celsius below is then Fahrenheit. */
+const inFahrenheit = (input: BurnoutCurveInput): BurnoutCurveInput => ({
+  ...input,
+  limit: input.limit && { ...input.limit, celsius: fahrenheit(input.limit.celsius) },
+  channels: input.channels.map((c) => ({ ...c, peakC: fahrenheit(c.peakC), points: c.points.map((p) => ({ ...p, celsius: fahrenheit(p.celsius) })) })),
+});
 
 function span(values: readonly number[]): Span {
   let [from, to] = [Infinity, -Infinity];
@@ -83,10 +96,12 @@ function span(values: readonly number[]): Span {
   return { from, to };
 }
 
-function spoken({ limit }: BurnoutCurveInput, hottest: BurnoutChannel, channels: readonly BurnoutChannel[]): string[] {
+function spoken(input: BurnoutCurveInput, hottest: BurnoutChannel, channels: readonly BurnoutChannel[]): string[] {
+  const { limit } = input;
+  const unit = unitOf(input);
   const which = channels.length > 1 ? `${hottest.name}, the hottest of ${channels.length}` : hottest.name;
-  if (!limit) return [`${which}: peak ${hottest.peakC.toFixed(0)} °C. No limit is set.`];
-  const words = [`${which}: peak ${hottest.peakC.toFixed(0)} °C; ${limit.words}.`];
+  if (!limit) return [`${which}: peak ${hottest.peakC.toFixed(0)} ${unit}. No limit is set.`];
+  const words = [`${which}: peak ${hottest.peakC.toFixed(0)} ${unit}; ${limit.words}.`];
   const { aboveLimit } = hottest;
   if (aboveLimit && aboveLimit.minutes > 0) words.push(`${atLeastOne(aboveLimit.minutes)} min above the limit, hatched.`);
   else if (hottest.peakC <= limit.celsius) words.push('Never above the limit while it was read.');
@@ -95,12 +110,12 @@ function spoken({ limit }: BurnoutCurveInput, hottest: BurnoutChannel, channels:
 }
 const atLeastOne = (minutes: number) => (minutes < 1 ? 'under 1' : minutes.toFixed(0));
 
-function scales(plot: Plot, minutes: Span, celsius: Span): Shape[] {
+function scales(plot: Plot, minutes: Span, celsius: Span, degrees: string): Shape[] {
   // a short record is read in minutes
   const [unit, perUnit] = minutes.to - minutes.from < 120 ? ['min', 1] : ['h', 60];
   const most = plot.right > 400 ? 8 : 5;
   return [
-    label(0, 11, '°C'),
+    label(0, 11, degrees),
     ...roundTicks(celsius, 5).flatMap((t) => [across(plot, plot.y(t), 'hair', 0.8), label(plot.left - 5, plot.y(t) + 4, String(t).replace('-', '−'), 'end')]),
     across(plot, plot.bottom, 'line', 1),
     ...roundTicks({ from: minutes.from / perUnit, to: minutes.to / perUnit }, most).map((tick) => {
@@ -156,16 +171,17 @@ function hatched({ limit }: BurnoutCurveInput, hottest: BurnoutChannel, plot: Pl
   return stretchesAbove(hottest, limit.celsius, plot).map(({ from, to }) => ({ kind: 'hatch', x: from, y: top, width: Math.max(1, to - from), height: plot.y(limit.celsius) - top, ink: 'fails' }));
 }
 
-function limitLine({ limit }: BurnoutCurveInput, plot: Plot): Shape[] {
+function limitLine(input: BurnoutCurveInput, plot: Plot): Shape[] {
+  const { limit } = input;
   if (!limit) return [];
   const y = plot.y(limit.celsius);
-  return [across(plot, y, 'fails', 2), label(plot.left + 4, y + 14, `${limit.celsius} °C`, 'start', 'fails', 11.5)];
+  return [across(plot, y, 'fails', 2), label(plot.left + 4, y + 14, `${Number(limit.celsius.toFixed(1))} ${unitOf(input)}`, 'start', 'fails', 11.5)];
 }
 
-function peak(hottest: BurnoutChannel, plot: Plot): Shape[] {
+function peak(hottest: BurnoutChannel, plot: Plot, unit: string): Shape[] {
   const at = hottest.points.reduce((best, p) => (p.celsius > best.celsius ? p : best));
   const [x, y] = [plot.x(at.minute), plot.y(at.celsius)];
-  const words = `${hottest.peakC.toFixed(0)} °C`;
+  const words = `${hottest.peakC.toFixed(0)} ${unit}`;
   const half = words.length * 3.6;
   return [
     { kind: 'circle', cx: x, cy: y, r: 3.6, fill: 'card', stroke: 'copper', strokeWidth: 2 },
