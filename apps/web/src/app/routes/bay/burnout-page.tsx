@@ -6,7 +6,7 @@ import { Link, useParams } from 'react-router-dom';
 import { useBayDensity } from '../../../components/density.js';
 import { Answer } from '../../../components/faces.js';
 import { PageHeader, Panel } from '../../../components/panel.js';
-import { loadQuery } from '../../../features/burnouts/api/load-queries.js';
+import { loadQuery, waitingJobsQuery } from '../../../features/burnouts/api/load-queries.js';
 import { AnotherFile } from '../../../features/burnouts/components/another-file.js';
 import { CorrectLoad } from '../../../features/burnouts/components/correct-load.js';
 import { FileDrop } from '../../../features/burnouts/components/file-drop.js';
@@ -29,6 +29,7 @@ export function BurnoutPage() {
 function Load({ load }: { readonly load: LoadView }) {
   const mayWrite = useMay('burnouts.write');
   const bay = useQuery({ ...bayQuery, enabled: mayWrite });
+  const waiting = useQuery({ ...waitingJobsQuery, enabled: mayWrite });
   const [correcting, setCorrecting] = useState(false);
   return (
     <div className="stack">
@@ -39,7 +40,7 @@ function Load({ load }: { readonly load: LoadView }) {
             {calendarDay(load.day)} · {load.by} · <Link to="/bay/burnouts">{t('toList')}</Link>
           </>
         }
-        actions={mayWrite && <Button text={t('correct')} onClick={() => setCorrecting(true)} />}
+        actions={mayWrite && <Button text={t('correct')} disabled={!bay.data || !waiting.data} onClick={() => setCorrecting(true)} />}
       />
       <div className="two-columns">
         <div className="stack">
@@ -64,7 +65,7 @@ function Load({ load }: { readonly load: LoadView }) {
           </div>
         </Panel>
       </div>
-      {correcting && bay.data && <CorrectLoad load={load} ovens={bay.data.ovens} onClose={() => setCorrecting(false)} />}
+      {correcting && bay.data && waiting.data && <CorrectLoad load={load} ovens={bay.data.ovens} waiting={waiting.data} onClose={() => setCorrecting(false)} />}
     </div>
   );
 }

@@ -172,7 +172,7 @@ describe('a load that was burnt', () => {
 
 describe('correcting a load', () => {
   const open = (onClose = vi.fn()) => {
-    inShop(<CorrectLoad load={overheated} ovens={OVENS} onClose={onClose} />, { me: somebody(['technician']) });
+    inShop(<CorrectLoad load={overheated} ovens={OVENS} waiting={waiting} onClose={onClose} />, { me: somebody(['technician']) });
     return onClose;
   };
   it('asks why, and sends what is put right', async () => {
@@ -184,9 +184,11 @@ describe('correcting a load', () => {
     await person.clear(screen.getByLabelText(/Added to every reading/));
     await person.type(screen.getByLabelText(/Added to every reading/), '11');
     await person.click(screen.getByRole('checkbox', { name: 'T.3' }));
+    await person.click(screen.getByRole('checkbox', { name: /^J2026-0011 ·/ }));
+    await person.click(screen.getByRole('checkbox', { name: /^J2026-0011: commutator/ }));
     await person.click(screen.getByRole('button', { name: 'Save and judge anew' }));
     await waitFor(() => expect(onClose).toHaveBeenCalled());
-    expect(asked.find((a) => a.method === 'PUT')?.body).toMatchObject({ version: 2, reason: 'Sensor reads 11 K low.', offsetK: 11, partChannels: ['Core'] });
+    expect(asked.find((a) => a.method === 'PUT')?.body).toMatchObject({ version: 2, reason: 'Sensor reads 11 K low.', offsetK: 11, partChannels: ['Core'], jobs: [{ jobId: 'job-0000004', ringsOff: false }, { jobId: 'job-0000005', ringsOff: false }, { jobId: 'job-0000011', ringsOff: true }] });
   });
 
   it('shows both where somebody else was faster, and sends mine when told', async () => {
