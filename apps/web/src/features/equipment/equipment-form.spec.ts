@@ -76,8 +76,28 @@ describe('two people at the lists at once', () => {
     expect(equipmentDifferences(BAY, form(), 'si')).toEqual([]);
   });
 
-  it('mine kept on top of theirs adds anew what they took off', () => {
-    const mine = onTopOf(form(), theirs);
-    expect([mine.version, mine.cables[0]!.id, mine.supplies[0]!.id]).toEqual([4, null, 's1']);
+  it('mine kept on top of theirs leaves theirs what I did not touch: changed, taken off or added', () => {
+    const mine = form();
+    mine.supplies[0]!.name = 'S1 west wall';
+    const merged = onTopOf(mine, theirs, form(), 'si');
+    expect(merged.version).toBe(4);
+    expect(merged.supplies.map((s) => [s.id, s.name])).toEqual([['s1', 'S1 west wall'], ['s2', 'S2'], ['s3', 'S3']]);
+    expect(merged.cables).toEqual([]);
+    expect(merged.ovens[0]!.thermocoupleOffsetK.text).toBe('0');
+    expect(equipmentDifferences(theirs, merged, 'si').map((d) => d.label)).toEqual(['Supply 1']);
+  });
+
+  it('what I changed and they took off is added anew, and what I took off stays off', () => {
+    const mine = form();
+    mine.cables[0]!.lengthM = si('36');
+    mine.supplies.splice(1, 1);
+    const merged = onTopOf(mine, theirs, form(), 'si');
+    expect(merged.cables.map((c) => [c.id, c.lengthM.text])).toEqual([[null, '36']]);
+    expect(merged.supplies.map((s) => s.id)).toEqual(['s1', 's3']);
+  });
+
+  it('a draft of an older list, of which nobody knows what was touched, stays as it was typed', () => {
+    const merged = onTopOf({ ...form(), version: 2 }, theirs, form(), 'si');
+    expect([merged.version, merged.cables[0]!.id, merged.ovens[0]!.thermocoupleOffsetK.text]).toEqual([4, null, '-11']);
   });
 });

@@ -101,8 +101,35 @@ export function readEquipment(form: EquipmentForm): ReadEquipment {
   return { input: problems.length === 0 && parsed.success ? parsed.data : null, problems };
 }
 
-/** Put on top of what somebody else saved: what they took off meanwhile is added anew. */
-export function onTopOf(form: EquipmentForm, theirs: EquipmentView): EquipmentForm {
-  const anew = <T extends { id: string | null }>(list: readonly T[], known: readonly { id: string }[]): T[] => list.map((thing) => (thing.id !== null && !known.some((k) => k.id === thing.id) ? { ...thing, id: null } : thing));
-  return { version: theirs.version, supplies: anew(form.supplies, theirs.supplies), cables: anew(form.cables, theirs.cables), ovens: anew(form.ovens, theirs.ovens) };
+interface Thing {
+  readonly id: string | null;
+}
+const same = (a: Thing, b: Thing | undefined): boolean => b !== undefined && JSON.stringify(a) === JSON.stringify(b);
+
+/** Thing by thing: what was not touched here is as theirs, what was is as here; what was added or taken off on either side stays so. */
+function merged<T extends Thing>(mine: readonly T[], theirs: readonly T[], base: readonly T[] | null): T[] {
+  const known = new Map(theirs.map((thing) => [thing.id, thing]));
+  const before = new Map((base ?? []).map((thing) => [thing.id, thing]));
+  const kept = mine.flatMap((thing): T[] => {
+    if (thing.id === null) return [thing];
+    const their = known.get(thing.id);
+    const untouched = base !== null && same(thing, before.get(thing.id));
+    if (their) return [untouched ? their : thing];
+    // they took it off: gone when it was not touched here, else added anew
+    return untouched ? [] : [{ ...thing, id: null }];
+  });
+  const added = base === null ? [] : theirs.filter((their) => !before.has(their.id) && !mine.some((thing) => thing.id === their.id));
+  return [...kept, ...added];
+}
+
+/** Put on top of what somebody else saved. `base` is what both began with; without it everything typed here stays. */
+export function onTopOf(form: EquipmentForm, view: EquipmentView, base: EquipmentForm | null, system: UnitSystem): EquipmentForm {
+  const theirs = equipmentFormOf(view, system);
+  const began = base?.version === form.version ? base : null;
+  return {
+    version: view.version,
+    supplies: merged(form.supplies, theirs.supplies, began && began.supplies),
+    cables: merged(form.cables, theirs.cables, began && began.cables),
+    ovens: merged(form.ovens, theirs.ovens, began && began.ovens),
+  };
 }

@@ -4,6 +4,7 @@ import { useState } from 'react';
 import { useFieldArray, useForm, useWatch, type Control } from 'react-hook-form';
 import { DraftNotice, useDraft } from '../../../components/draft.js';
 import { ChoiceField, TextField } from '../../../components/fields.js';
+import { IntoView } from '../../../components/into-view.js';
 import { ConflictNotice, ErrorNotice } from '../../../components/notices.js';
 import { QuantityField } from '../../../components/quantity-field.js';
 import { useTell } from '../../../components/toaster.js';
@@ -34,19 +35,27 @@ export function EquipmentEditor({ equipment }: { readonly equipment: EquipmentVi
   const tell = useTell();
   const save = useSaveEquipment();
   const mayEdit = useMay('equipment.edit');
-  const form = useForm<EquipmentForm>({ defaultValues: equipmentFormOf(equipment, units) });
+  // what the form was filled from: tells, when two save at once, what was touched here
+  const [began, setBegan] = useState(() => equipmentFormOf(equipment, units));
+  const form = useForm<EquipmentForm>({ defaultValues: began });
   const { control, getValues, reset, setError, clearErrors } = form;
   const draft = useDraft(form, 'equipment');
   const [settled, setSettled] = useState<unknown>(null);
   const theirs = save.error === settled ? null : theirsOf(save.error);
+  const mine = theirs ? onTopOf(getValues(), theirs, began, units) : null;
+  const beginWith = (view: EquipmentView) => {
+    const filled = equipmentFormOf(view, units);
+    draft.forget();
+    setBegan(filled);
+    reset(filled);
+  };
   const send = (values: EquipmentForm) => {
     clearErrors();
     const { input, problems } = readEquipment(values);
     if (!input) return showProblems(problems, setError);
     save.mutate(input, {
       onSuccess: (saved) => {
-        draft.forget();
-        reset(equipmentFormOf(saved, units));
+        beginWith(saved);
         tell(t('saved'));
       },
       onError: (error) => showServerProblems(error, setError),
@@ -62,20 +71,22 @@ export function EquipmentEditor({ equipment }: { readonly equipment: EquipmentVi
       }}
     >
       <DraftNotice form={form} draft={draft} />
-      {theirs && (
-        <ConflictNotice
-          differences={equipmentDifferences(theirs, getValues(), units)}
-          onTakeTheirs={() => {
-            draft.forget();
-            reset(equipmentFormOf(theirs, units));
-            setSettled(save.error);
-          }}
-          onKeepMine={() => {
-            const mine = onTopOf(getValues(), theirs);
-            reset(mine, { keepDefaultValues: true });
-            send(mine);
-          }}
-        />
+      {theirs && mine && (
+        <IntoView>
+          <ConflictNotice
+            differences={equipmentDifferences(theirs, mine, units)}
+            onTakeTheirs={() => {
+              beginWith(theirs);
+              setSettled(save.error);
+            }}
+            onKeepMine={() => {
+              const merged = onTopOf(getValues(), theirs, began, units);
+              setBegan(equipmentFormOf(theirs, units));
+              reset(merged, { keepDefaultValues: true });
+              send(merged);
+            }}
+          />
+        </IntoView>
       )}
       <Supplies control={control} mayEdit={mayEdit} />
       <Cables control={control} mayEdit={mayEdit} />

@@ -7,6 +7,7 @@ import { useMemo, useState } from 'react';
 import { useForm, useWatch, type Control } from 'react-hook-form';
 import { DraftNotice, useDraft } from '../../../components/draft.js';
 import { TextAreaField } from '../../../components/fields.js';
+import { IntoView } from '../../../components/into-view.js';
 import { ConflictNotice, ErrorNotice } from '../../../components/notices.js';
 import { Panel } from '../../../components/panel.js';
 import { useUnits } from '../../../components/units.js';
@@ -105,10 +106,10 @@ export function LimitsEditor({ versions, onPublished, onCancel }: EditorProps) {
     >
       <DraftNotice form={form} draft={draft} />
       {merged && (
-        <>
+        <IntoView>
           <p className="muted">{t('theirsMeanwhile', { version: newest.version, who: newest.publishedBy, note: newest.note })}</p>
           <ConflictNotice differences={conflictLines(limitDifferences(newest.set, readSet(merged, newest.set)), units)} onTakeTheirs={takeTheirs} onKeepMine={onTheirs} />
-        </>
+        </IntoView>
       )}
       {LIMIT_SECTIONS.map((section) => (
         <Panel key={section.key} title={section.title}>
