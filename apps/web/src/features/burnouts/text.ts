@@ -103,6 +103,7 @@ export const t = defineText({
   limitWords: 'limit {limit}, {reason}',
   channels: 'Thermocouples',
   channel: 'Thermocouple',
+  where: 'Sits',
   onPart: 'on a part',
   notOnPart: 'elsewhere',
   atClock: 'at {clock}',

@@ -15,7 +15,7 @@ export function FileRead({ loadId, file }: { readonly loadId: string; readonly f
           <caption className="visually-hidden">{t('channels')}</caption>
           <thead role="rowgroup">
             <tr role="row">
-              {[t('channel'), '', t('peak'), t('heating'), t('cooling'), t('gaps')].map((title, i) => (
+              {[t('channel'), t('where'), t('peak'), t('heating'), t('cooling'), t('gaps')].map((title, i) => (
                 <th key={i} scope="col" role="columnheader">
                   {title}
                 </th>

@@ -21,7 +21,7 @@ export function OvenTable({ insight, shown }: OvenTableProps) {
   const mayWrite = useMay('insight.write');
   const [taking, setTaking] = useState<OvenPoint | null>(null);
   return (
-    <div className="lb-table-wrap lb-oven-scroll" role="region" aria-label={t('table')} tabIndex={0}>
+    <div className="lb-table-wrap lb-oven-scroll" role="region" aria-label={t('tableCaption', { name: insight.oven.name })} tabIndex={0}>
       <table className="lb-table lb-oven-table" role="table">
         <caption className="visually-hidden">{t('tableCaption', { name: insight.oven.name })}</caption>
         <thead role="rowgroup">
